@@ -1,0 +1,1 @@
+"""From survey and wishes to a plan."""

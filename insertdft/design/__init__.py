@@ -1,0 +1,1 @@
+"""One flat graph over netlist and library."""

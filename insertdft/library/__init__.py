@@ -1,0 +1,1 @@
+"""Cells, their functions and their scan roles."""

@@ -1,0 +1,43 @@
+"""The netlist graph: columns, names and views."""
+
+from insertdft.netlist.columns import (
+    CONST0,
+    CONST1,
+    CONSTANT_NAMES,
+    CONSTX,
+    CONSTZ,
+    FIRST_NET,
+    OPEN,
+    PRIMITIVES,
+    Header,
+    Ids,
+    Instance,
+    InstanceId,
+    Module,
+    NetId,
+    Netlist,
+    Offsets,
+    Port,
+    Vector,
+)
+
+__all__ = [
+    "CONST0",
+    "CONST1",
+    "CONSTANT_NAMES",
+    "CONSTX",
+    "CONSTZ",
+    "FIRST_NET",
+    "OPEN",
+    "PRIMITIVES",
+    "Header",
+    "Ids",
+    "Instance",
+    "InstanceId",
+    "Module",
+    "NetId",
+    "Netlist",
+    "Offsets",
+    "Port",
+    "Vector",
+]

@@ -1,0 +1,1 @@
+"""From two texts to a verdict; shares no planning code."""

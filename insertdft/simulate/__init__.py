@@ -1,0 +1,1 @@
+"""Values on a design: three-valued and bit-parallel."""

@@ -1,0 +1,1 @@
+"""Structural Verilog text to a netlist that remembers its places."""

@@ -1,0 +1,1 @@
+"""What replaces a storage cell, one file a style."""

@@ -1,0 +1,1 @@
+"""Facts and findings about a design."""
