@@ -68,12 +68,15 @@ class Design:
         netlist: What it was made from.
         library: What it was made from.
         occurrences: Id 0 is the top; parents come before their children.
-        cells: The cell of each entry of ``netlist.cell_names``; None for a module or a black box.
-        cell: Shape (n,), ids into ``netlist.cell_names``.
+        cell_names: Those of the netlist, then one more entry for each gate primitive with another
+            number of pins (``nand`` of 3 and of 4 pins are two cells of one name).
+        cells: The cell of each entry of ``cell_names``; None for a module or a black box.
+        pin_names: Those of the netlist, then those that only linking brought in.
+        cell: Shape (n,), ids into ``cell_names``.
         occurrence: Shape (n,), occurrence that holds the instance.
         local: Shape (n,), instance id within that occurrence's module.
         pin_start: Shape (n + 1,), rows of instance i are ``pin_start[i]:pin_start[i + 1]``.
-        pin_name: Shape (m,), ids into ``netlist.pin_names``.
+        pin_name: Shape (m,), ids into ``pin_names``.
         pin_net: Shape (m,), flat nets, OPEN where unconnected.
         pin_direction: Shape (m,), INPUT, OUTPUT, INOUT or UNKNOWN (black box).
         net_count: ``w``; net ids run from 0 to ``w - 1`` (some ids are unused after merging).
@@ -84,7 +87,9 @@ class Design:
     netlist: Netlist
     library: Library
     occurrences: Sequence[Occurrence] = field(repr=False)
+    cell_names: Sequence[str] = field(repr=False)
     cells: Sequence[Cell | None] = field(repr=False)
+    pin_names: Sequence[str] = field(repr=False)
     cell: Ids = field(repr=False)
     occurrence: Ids = field(repr=False)
     local: Ids = field(repr=False)
@@ -103,7 +108,7 @@ class Design:
 
     def cell_name(self, instance: int) -> str:
         """Return the name of the cell that ``instance`` is of."""
-        return self.netlist.cell_names[int(self.cell[instance])]
+        return self.cell_names[int(self.cell[instance])]
 
     def cell_of(self, instance: int) -> Cell | None:
         """Return the library cell of ``instance``, None for a black box."""
@@ -131,7 +136,7 @@ class Design:
     def pins(self, instance: int) -> dict[str, int]:
         """Return flat net by pin name of one leaf instance."""
         rows = slice(int(self.pin_start[instance]), int(self.pin_start[instance + 1]))
-        names = self.netlist.pin_names
+        names = self.pin_names
         return {
             names[pin]: net
             for pin, net in zip(
