@@ -2,6 +2,7 @@
 
 from collections.abc import Iterable, Sequence
 from dataclasses import dataclass
+from difflib import get_close_matches
 from enum import Enum
 from typing import Final
 
@@ -146,6 +147,12 @@ def to_json(item: Diagnostic) -> dict[str, object]:
     if item.also:
         found["also"] = [{"place": span.place, "words": words} for span, words in item.also]
     return found
+
+
+def nearest(name: str, known: Iterable[str]) -> str | None:
+    """Return "did you mean ..." with the known names closest to ``name``, or None."""
+    close = get_close_matches(name, list(known), n=3, cutoff=0.6)
+    return f"did you mean {' or '.join(f'`{item}`' for item in close)}?" if close else None
 
 
 def errors(items: Sequence[Diagnostic]) -> list[Diagnostic]:

@@ -218,6 +218,7 @@ class Cell:
         name: As the library writes it.
         area: In the library's area unit, None where not given.
         pins: By name, in the library's order.
+        power_pins: Names of its supply pins (``pg_pin``); a netlist may connect them.
         pin_order: Order of connection by position where it is known (from a Verilog model).
         storage: ff and latch groups.
         state_table: The statetable group, if any.
@@ -235,6 +236,7 @@ class Cell:
     area: float | None
     pins: Mapping[str, Pin] = field(repr=False)
     pin_order: tuple[str, ...] | None = None
+    power_pins: tuple[str, ...] = ()
     storage: tuple[Storage, ...] = ()
     state_table: StateTable | None = None
     test_cell: TestCell | None = None

@@ -202,6 +202,30 @@ def _fold_xor(parts: list[Expression]) -> Expression:
     return negation(result) if odd else result
 
 
+def as_literal(expression: Expression, names: Sequence[str]) -> Expression | None:
+    """Return the constant, the variable or the inverted variable that an expression equals.
+
+    Args:
+        expression: Over ``names``; its truth table is made, so keep them few.
+        names: Its variables.
+
+    Returns:
+        ``Const``, ``Var`` or ``Not(Var)``; None if it depends on two variables or more.
+    """
+    if isinstance(expression, Const | Var):
+        return expression
+    table = truth_table(expression, names)
+    ones = (1 << (1 << len(names))) - 1
+    if table in (0, ones):
+        return Const(table == ones)
+    for name, column in zip(names, columns(len(names)), strict=True):
+        if table == column:
+            return Var(name)
+        if table == column ^ ones:
+            return Not(Var(name))
+    return None
+
+
 TOKEN: Final = re.compile(
     r"""\s*(?:([A-Za-z_$][\w$]*(?:\s*\[\s*\d+\s*(?::\s*\d+\s*)?\])?|\\?"[^"]+?\\?"|\d[\w$]+(?<!['])"""
     r"""|[01](?![\w$]))|([!'^&*|+()]))""",
