@@ -21,7 +21,8 @@ class Reducer:
 
     def __init__(self) -> None:
         """Start with nothing worked out."""
-        self._seen: dict[tuple[Expression, Known], Expression] = {}
+        # By identity: hashing an expression walks it. The entry keeps its expression alive.
+        self._seen: dict[tuple[int, Known], tuple[Expression, Expression]] = {}
 
     def reduce(self, expression: Expression, known: Known) -> Expression:
         """Return ``expression`` with the known pins filled in, as simple as its function is.
@@ -29,10 +30,10 @@ class Reducer:
         A result that is a constant, one pin or one inverted pin is recognised in any writing of
         the function; other results may mention pins that do not matter.
         """
-        key = (expression, known)
+        key = (id(expression), known)
         if key not in self._seen:
-            self._seen[key] = _simplest(expression, known)
-        return self._seen[key]
+            self._seen[key] = (expression, _simplest(expression, known))
+        return self._seen[key][1]
 
 
 #: Functions of more free inputs than this are not tabulated.

@@ -70,7 +70,9 @@ class Walker:
         return self._reducer.reduce(expression, known_pins(self.design, instance, self.values))
 
     def _walk(self, net: int) -> Source:
-        inverted, passed, seen = False, [], set()
+        inverted = False
+        passed: list[int] = []
+        seen: set[int] = set()
         while True:
             end = self._end_at(net)
             if end is not None:

@@ -1,0 +1,83 @@
+"""The survey itself: every storage cell, where its clock comes from, what keeps it out."""
+
+from collections.abc import Mapping
+
+import numpy as np
+
+from insertdft.design.flat import Design
+from insertdft.library.cell import StorageKind
+from insertdft.netlist import Ids
+from insertdft.simulate.constants import propagate
+from insertdft.simulate.paths import Walker
+from insertdft.survey.clocks import find_clocks
+from insertdft.survey.facts import LEFT_ALONE, Survey
+from insertdft.survey.kept import find_kept
+from insertdft.survey.resets import find_set_resets
+from insertdft.survey.verdict import Verdict
+
+
+def survey(
+    design: Design,
+    held: Mapping[str, int] | None = None,
+    kept: tuple[str, ...] = (),
+) -> Survey:
+    """Return the facts about ``design``.
+
+    Args:
+        design: The flat design.
+        held: Test-mode values of ports (bits) that the user promises to hold.
+        kept: Patterns of hierarchical names that the user wants left alone.
+
+    Raises:
+        DesignError: A held port or a pattern matches nothing.
+    """
+    storage = storage_instances(design)
+    walker = Walker(design, propagate(design, _nets_of(design, held or {})))
+    verdict = Verdict(design)
+    find_kept(verdict, storage, kept)
+    clocks = find_clocks(walker, storage, verdict)
+    set_resets = find_set_resets(walker, storage, verdict)
+    domain = np.array(
+        [LEFT_ALONE if cell in verdict.reasons else clocks.of[cell] for cell in storage.tolist()],
+        np.int32,
+    )
+    area, without_area = total_area(design)
+    return Survey(
+        design=design,
+        storage=storage,
+        domain=domain,
+        domains=clocks.domains,
+        set_resets=set_resets,
+        findings=tuple(verdict.findings),
+        reasons=verdict.reasons,
+        area=area,
+        without_area=without_area,
+    )
+
+
+def storage_instances(design: Design) -> Ids:
+    """Return the flat ids of all storage cells, in hierarchical source order."""
+    keeps = np.array([cell is not None and cell.is_storage for cell in design.cells], bool)
+    return np.flatnonzero(keeps[design.cell]).astype(np.int32)
+
+
+def is_latch(design: Design, instance: int) -> bool:
+    """Return whether ``instance`` is a level-sensitive latch."""
+    cell = design.cell_of(instance)
+    return cell is not None and any(item.kind is StorageKind.LATCH for item in cell.storage)
+
+
+def total_area(design: Design) -> tuple[float, tuple[str, ...]]:
+    """Return the sum of cell areas and the names of cells that state none."""
+    counts = np.bincount(design.cell, minlength=len(design.cells))
+    area, without = 0.0, []
+    for name, cell, count in zip(design.cell_names, design.cells, counts.tolist(), strict=True):
+        if count and (cell is None or cell.area is None):
+            without.append(name)
+        elif count and cell is not None and cell.area is not None:
+            area += cell.area * count
+    return area, tuple(sorted(set(without)))
+
+
+def _nets_of(design: Design, held: Mapping[str, int]) -> dict[int, int]:
+    return {design.port_nets[port]: value for port, value in held.items()}
