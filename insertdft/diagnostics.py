@@ -55,7 +55,10 @@ SLUGS: Final[dict[str, str]] = {
     "reset-not-controllable": "A set or reset of a storage cell cannot be held off from a port",
     "cell-kept": "A storage cell is left alone because the netlist or the user says so",
     "latch-not-scanned": "A latch stays out of every chain in this style",
+    "scan-pins-in-use": "A scan cell has its scan pins connected already",
     # plan
+    "nothing-to-convert": "No storage cell can be converted",
+    "module-copies-differ": "A cell can be converted in some places of its module but not in all",
     "pattern-unmatched": "A name pattern of the user matches nothing",
     "chains-too-many": "More chains are asked for than there are cells to put into them",
     "chains-too-few": "Fewer chains are asked for than clock and edge groups need",

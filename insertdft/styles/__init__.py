@@ -1,1 +1,6 @@
 """What replaces a storage cell, one file a style."""
+
+from insertdft.styles.choose import Chooser
+from insertdft.styles.conversion import Conversion, Part, Refusal, ScanTap, TestNet
+
+__all__ = ["Chooser", "Conversion", "Part", "Refusal", "ScanTap", "TestNet"]

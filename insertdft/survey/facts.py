@@ -31,7 +31,7 @@ class Domain(NamedTuple):
 
 
 class HeldPort(NamedTuple):
-    """A port that keeps sets and resets off while it has ``value``."""
+    """A port (bit) that has ``value`` while chains shift."""
 
     port: str
     value: int
@@ -48,6 +48,7 @@ class Survey:
         storage: Shape (s,), flat instance ids in hierarchical source order.
         domain: Shape (s,), ids into ``domains``, LEFT_ALONE for a cell that has a finding.
         domains: Where the clocks come from.
+        held: Ports that the user promises to hold in test.
         set_resets: Ports to hold while shifting, so that no set or reset acts.
         findings: What keeps cells out of chains, one a cause.
         reasons: Flat instance id -> slug of the finding that keeps it out.
@@ -59,6 +60,7 @@ class Survey:
     storage: Ids = field(repr=False)
     domain: Ids = field(repr=False)
     domains: tuple[Domain, ...]
+    held: tuple[HeldPort, ...]
     set_resets: tuple[HeldPort, ...]
     findings: tuple[Diagnostic, ...]
     reasons: Mapping[int, str] = field(repr=False)

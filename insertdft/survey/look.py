@@ -5,12 +5,13 @@ from collections.abc import Mapping
 import numpy as np
 
 from insertdft.design.flat import Design
+from insertdft.diagnostics import DesignError, Diagnostic, error, nearest
 from insertdft.library.cell import StorageKind
 from insertdft.netlist import Ids
 from insertdft.simulate.constants import propagate
 from insertdft.simulate.paths import Walker
 from insertdft.survey.clocks import find_clocks
-from insertdft.survey.facts import LEFT_ALONE, Survey
+from insertdft.survey.facts import LEFT_ALONE, HeldPort, Survey
 from insertdft.survey.kept import find_kept
 from insertdft.survey.resets import find_set_resets
 from insertdft.survey.verdict import Verdict
@@ -32,7 +33,8 @@ def survey(
         DesignError: A held port or a pattern matches nothing.
     """
     storage = storage_instances(design)
-    walker = Walker(design, propagate(design, _nets_of(design, held or {})))
+    promised = held or {}
+    walker = Walker(design, propagate(design, _nets_of(design, promised)))
     verdict = Verdict(design)
     find_kept(verdict, storage, kept)
     clocks = find_clocks(walker, storage, verdict)
@@ -47,6 +49,7 @@ def survey(
         storage=storage,
         domain=domain,
         domains=clocks.domains,
+        held=tuple(HeldPort(port, value) for port, value in promised.items()),
         set_resets=set_resets,
         findings=tuple(verdict.findings),
         reasons=verdict.reasons,
@@ -80,4 +83,16 @@ def total_area(design: Design) -> tuple[float, tuple[str, ...]]:
 
 
 def _nets_of(design: Design, held: Mapping[str, int]) -> dict[int, int]:
-    return {design.port_nets[port]: value for port, value in held.items()}
+    inputs = {port.name: port.net for port in design.ports if port.direction != "output"}
+    missing = [_no_such_port(port, inputs) for port in held if port not in inputs]
+    if missing:
+        raise DesignError(missing)
+    return {inputs[port]: value for port, value in held.items()}
+
+
+def _no_such_port(port: str, inputs: Mapping[str, int]) -> Diagnostic:
+    return error(
+        "port-unknown",
+        f"`{port}` is to be held in test but is no input port",
+        hint=nearest(port, inputs) or "name one bit of an input port of the top module",
+    )

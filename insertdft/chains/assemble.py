@@ -1,0 +1,189 @@
+"""Put the plan together: names of ports, test nets of modules, areas."""
+
+from collections.abc import Iterable, Mapping, Sequence
+from hashlib import sha256
+
+import numpy as np
+
+from insertdft.chains.arrange import Arrangement
+from insertdft.chains.choose import Chosen
+from insertdft.chains.names import PortNamer
+from insertdft.chains.plan import ChainPlan, Element, LeftAlone, ModulePlan, Plan, Segment
+from insertdft.chains.wishes import Wishes
+from insertdft.description import TestPort
+from insertdft.design.flat import Design
+from insertdft.library import find_buffers
+from insertdft.netlist import OPEN, Instance, Module
+from insertdft.styles import Conversion, TestNet
+from insertdft.styles.mux_d import sequences
+from insertdft.survey import Survey
+
+
+def assemble(
+    survey: Survey,
+    wishes: Wishes,
+    chosen: Chosen,
+    arrangement: Arrangement,
+    segments: dict[str, list[tuple[Element, ...]]],
+) -> Plan:
+    """Return the plan of an arrangement laid into modules."""
+    design = survey.design
+    touched = [design.netlist.modules[name] for name in design.netlist.modules if name in segments]
+    namer = PortNamer(touched, wishes.ports)
+    needs = _test_nets(design, chosen.conversions, segments)
+    used = [net for net in TestNet if any(net in nets for nets in needs.values())]
+    port_names = {net: namer.one(net.value) for net in used}
+    most = max(map(len, segments.values()))
+    ins, outs = namer.numbered("scan_in", most), namer.numbered("scan_out", most)
+    modules = {
+        module.name: ModulePlan(
+            tuple(
+                Segment(
+                    ins[number],
+                    outs[number],
+                    elements,
+                    _is_connected(design, module, chosen.conversions, elements[-1]),
+                )
+                for number, elements in enumerate(segments[module.name])
+            ),
+            tuple(net for net in TestNet if net in needs[module.name]),
+        )
+        for module in touched
+    }
+    chains = tuple(
+        ChainPlan(f"chain_{number + 1}", domain.port, domain.edge)
+        for number, (group, _) in enumerate(arrangement.chains)
+        for domain in [survey.domains[chosen.groups[group]]]
+    )
+    connector = _connector(design, wishes)
+    held = {item.port: item.value for item in (*survey.held, *survey.set_resets)}
+    clocks = list(dict.fromkeys(chain.clock for chain in chains))
+    enable = port_names[TestNet.SCAN_ENABLE]
+    added, without = _added_area(survey, chosen, modules, connector)
+    return Plan(
+        design=design.netlist.top,
+        style=wishes.style,
+        netlist={source.name: fingerprint(source.text) for source in design.netlist.sources},
+        conversions=tuple(chosen.conversions),
+        modules=modules,
+        chains=chains,
+        port_names=port_names,
+        connector=connector,
+        ports=_ports(survey, chains, modules[design.netlist.top], enable),
+        sequences=sequences(enable, clocks, held),
+        left_alone=_left_alone(survey, chosen),
+        lower_bound=arrangement.lower_bound,
+        area_before=survey.area,
+        area_after=survey.area + added,
+        without_area=tuple(sorted({*survey.without_area, *without})),
+    )
+
+
+def fingerprint(text: str) -> str:
+    """Return the sha256 of a source as it came from the file (latin-1)."""
+    return sha256(text.encode("latin-1")).hexdigest()
+
+
+def _test_nets(
+    design: Design,
+    conversions: Sequence[Conversion],
+    segments: dict[str, list[tuple[Element, ...]]],
+) -> dict[str, set[TestNet]]:
+    """Return the test nets of each module, those of its inner modules included."""
+    found: dict[str, set[TestNet]] = {}
+
+    def need(module: str) -> set[TestNet]:
+        if module not in found:
+            nets: set[TestNet] = set()
+            for conversion in {at.number for at in flat(module) if not at.is_segment}:
+                nets |= set(conversions[conversion].test_nets())
+            for inner in inner_modules(module):
+                nets |= need(inner)
+            found[module] = nets
+        return found[module]
+
+    def flat(module: str) -> Iterable[Element]:
+        return (element for elements in segments[module] for element in elements)
+
+    def inner_modules(module: str) -> list[str]:
+        names = {at.instance for at in flat(module) if at.is_segment}
+        home = design.netlist.modules[module]
+        cells = design.netlist.cell_names
+        pairs = zip(home.instance_names, home.instance_cell.tolist(), strict=True)
+        return [cells[cell] for name, cell in pairs if name in names]
+
+    for module in segments:
+        need(module)
+    return found
+
+
+def _connector(design: Design, wishes: Wishes) -> tuple[str, str, str] | None:
+    if wishes.connect == "assign":
+        return None
+    buffer = next(iter(find_buffers(design.library)), None)
+    return None if buffer is None else (buffer.cell.name, buffer.input, buffer.output)
+
+
+def _is_connected(
+    design: Design, module: Module, conversions: Sequence[Conversion], last: Element
+) -> bool:
+    """Return whether the output that leaves a segment drives a net already."""
+    if last.is_segment:
+        return False
+    conversion = conversions[last.number]
+    tap = conversion.taps[0].pin
+    old = {new: old for old, new in conversion.pins.items()}.get(tap, tap)
+    instance = Instance(design.netlist, module, module.instance_names.index(last.instance))
+    return instance.pins.get(old, OPEN) != OPEN
+
+
+def _added_area(
+    survey: Survey,
+    chosen: Chosen,
+    modules: Mapping[str, ModulePlan],
+    connector: tuple[str, str, str] | None,
+) -> tuple[float, list[str]]:
+    """Return area added over all places of the design, and cells added that state none."""
+    design = survey.design
+    added, without = 0.0, []
+    counts = np.bincount(chosen.conversion[chosen.cells.leaves], minlength=len(chosen.conversions))
+    for conversion, count in zip(chosen.conversions, counts.tolist(), strict=True):
+        if conversion.area is None:
+            without += [conversion.after, *(part.cell for part in conversion.parts)]
+        else:
+            added += conversion.area * count
+    if connector is not None:
+        area = design.library.cells[connector[0]].area
+        added += (area or 0.0) * sum(
+            segment.connected
+            for place in design.occurrences
+            if place.module in modules
+            for segment in modules[place.module].segments
+        )
+        without += [] if area is not None else [connector[0]]
+    return added, without
+
+
+def _ports(
+    survey: Survey, chains: Sequence[ChainPlan], top: ModulePlan, enable: str
+) -> tuple[TestPort, ...]:
+    clocks = dict.fromkeys(chain.clock for chain in chains)
+    resets = {item.port: item.value for item in survey.set_resets}
+    modes = {item.port: item.value for item in survey.held}
+    return (
+        *(TestPort(clock, "clock", off=0) for clock in clocks),
+        *(TestPort(at, "set_reset", shift=on, capture=on) for at, on in resets.items()),
+        *(TestPort(at, "test_mode", shift=on, capture=on) for at, on in modes.items()),
+        TestPort(enable, "scan_enable", added=True, mission=0, shift=1, capture=0),
+        *(TestPort(segment.scan_in, "scan_in", added=True, mission=0) for segment in top.segments),
+        *(TestPort(segment.scan_out, "scan_out", added=True) for segment in top.segments),
+    )
+
+
+def _left_alone(survey: Survey, chosen: Chosen) -> tuple[LeftAlone, ...]:
+    design = survey.design
+    return tuple(
+        LeftAlone(design.name(leaf), design.cell_name(leaf), chosen.reasons[leaf])
+        for leaf in survey.storage.tolist()
+        if chosen.conversion[leaf] < 0
+    )

@@ -1,0 +1,128 @@
+"""Choose which cells are converted, and how."""
+
+from collections import defaultdict
+from collections.abc import Iterable, Sequence
+from dataclasses import dataclass, field
+
+import numpy as np
+
+from insertdft.chains.arrange import Cells
+from insertdft.chains.regions import Hierarchy, copies
+from insertdft.chains.wishes import Wishes
+from insertdft.design.flat import Design
+from insertdft.diagnostics import DesignError, Diagnostic, Severity
+from insertdft.netlist import Ids
+from insertdft.styles import Chooser, Conversion, Refusal
+from insertdft.survey import LEFT_ALONE, Survey
+from insertdft.survey.kept import matches, unmatched
+
+
+@dataclass(frozen=True, slots=True, eq=False)
+class Chosen:
+    """Cells to convert and why others are not.
+
+    Attributes:
+        cells: What goes into chains, by group.
+        groups: Survey domain of each group.
+        conversion: Shape (leaves,), index of the conversion of each leaf, -1 for none.
+        conversions: What the indices mean.
+        reasons: Leaf -> slug of what keeps it out.
+        findings: One a cause, beyond the survey's.
+    """
+
+    cells: Cells
+    groups: list[int]
+    conversion: Ids
+    conversions: list[Conversion]
+    reasons: dict[int, str]
+    findings: list[Diagnostic] = field(default_factory=list)
+
+
+def choose_cells(survey: Survey, wishes: Wishes, layout: Hierarchy) -> Chosen:
+    """Return the cells to convert, with their groups and conversions.
+
+    Raises:
+        DesignError: A pattern matches nothing.
+    """
+    design = survey.design
+    chooser = Chooser(design, wishes.style)
+    conversion = np.full(len(design.cell), -1, np.int32)
+    refused: defaultdict[Refusal, list[int]] = defaultdict(list)
+    wanted = survey.storage[survey.domain != LEFT_ALONE]
+    for leaf in _included(design, wanted, wishes.include, refused):
+        found = chooser.choose(leaf)
+        if isinstance(found, Refusal):
+            refused[found].append(leaf)
+        else:
+            conversion[leaf] = found
+    _agree(layout, conversion, refused)
+    group = np.full(len(design.cell), -1, np.int32)
+    group[survey.storage] = survey.domain
+    group[conversion < 0] = -1
+    leaves = np.flatnonzero(conversion >= 0).astype(np.int32)
+    groups = sorted(set(group[leaves].tolist()))
+    renumber = {domain: number for number, domain in enumerate(groups)}
+    group[leaves] = [renumber[domain] for domain in group[leaves].tolist()]
+    bits = np.zeros(len(design.cell), np.int32)
+    bits[leaves] = [chooser.conversions[at].bits for at in conversion[leaves].tolist()]
+    reasons = dict(survey.reasons)
+    reasons |= {leaf: refusal.slug for refusal, those in refused.items() for leaf in those}
+    findings = [_refusal(design, refusal, those) for refusal, those in refused.items()]
+    cells = Cells(leaves, group, bits)
+    return Chosen(cells, groups, conversion, chooser.conversions, reasons, findings)
+
+
+def _included(
+    design: Design, wanted: Ids, patterns: tuple[str, ...], refused: dict[Refusal, list[int]]
+) -> Iterable[int]:
+    leaves: list[int] = wanted.tolist()
+    if not patterns:
+        return leaves
+    names = {leaf: design.name(leaf) for leaf in leaves}
+    missed = [
+        unmatched(pattern, names.values())
+        for pattern in patterns
+        if not any(matches(name, pattern) for name in names.values())
+    ]
+    if missed:
+        raise DesignError(missed)
+    kept = [leaf for leaf, name in names.items() if any(matches(name, at) for at in patterns)]
+    chosen = set(kept)
+    others = [leaf for leaf in names if leaf not in chosen]
+    if others:
+        refused[_NOT_INCLUDED] = others
+    return kept
+
+
+_NOT_INCLUDED = Refusal(
+    "cell-kept", "left alone: no --include pattern names it", "name it to let it be converted"
+)
+_COPIES_DIFFER = Refusal(
+    "module-copies-differ",
+    "left alone: its module stands in several places and the cell cannot be converted in all",
+    "mend the finding of the other copies, or give this place a module of its own",
+)
+
+
+def _agree(layout: Hierarchy, conversion: Ids, refused: dict[Refusal, list[int]]) -> None:
+    """Convert an instance of a module that stands in several places in all of them or in none."""
+    for _, leaves in copies(layout):
+        found = conversion[leaves]
+        differ = (found != found[0]).any(axis=0)
+        lost = leaves[:, differ]
+        dropped = lost[conversion[lost] >= 0]
+        if len(dropped):
+            refused[_COPIES_DIFFER] = [*refused.get(_COPIES_DIFFER, []), *dropped.tolist()]
+        conversion[lost] = -1
+
+
+def _refusal(design: Design, refusal: Refusal, leaves: Sequence[int]) -> Diagnostic:
+    quiet = refusal.slug in ("latch-not-scanned", "cell-kept")
+    return Diagnostic(
+        refusal.slug,
+        Severity.NOTE if quiet else Severity.WARNING,
+        refusal.message,
+        design.span(leaves[0]),
+        refusal.hint,
+        names=tuple(design.name(leaf) for leaf in leaves),
+    )

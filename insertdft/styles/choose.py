@@ -1,0 +1,69 @@
+"""Choose the conversion of every storage cell, worked out once a kind of cell."""
+
+from collections.abc import Mapping
+
+from insertdft.design.flat import Design
+from insertdft.library.cell import Cell
+from insertdft.netlist import OPEN
+from insertdft.simulate.constants import propagate
+from insertdft.styles import mux_d
+from insertdft.styles.conversion import Conversion, Refusal
+
+
+class Chooser:
+    """Conversions of one design in one style.
+
+    Attributes:
+        conversions: Those in use so far; a conversion is known by its place here.
+    """
+
+    def __init__(self, design: Design, style: str) -> None:
+        """Take the design and the style's name.
+
+        Raises:
+            ValueError: The style is unknown.
+        """
+        if style != mux_d.NAME:
+            raise ValueError(f"unknown style {style!r}")
+        self.conversions: list[Conversion] = []
+        self._design = design
+        self._by_cell: dict[str, int | Refusal] = {}
+        self._constants: Mapping[int, int] | None = None
+
+    def choose(self, instance: int) -> int | Refusal:
+        """Return the index of the conversion of a storage instance, or why there is none."""
+        cell = self._design.cell_of(instance)
+        if cell is None:
+            raise ValueError(f"instance {instance} is a black box")
+        ready = mux_d.as_is(cell)
+        if ready is not None and not self._scan_pins_free(instance, ready):
+            return _in_use(cell)
+        if cell.name not in self._by_cell:
+            found = ready or mux_d.convert(self._design.library, cell)
+            self._by_cell[cell.name] = self._add(found)
+        return self._by_cell[cell.name]
+
+    def _add(self, found: Conversion | Refusal) -> int | Refusal:
+        if isinstance(found, Refusal):
+            return found
+        self.conversions.append(found)
+        return len(self.conversions) - 1
+
+    def _scan_pins_free(self, instance: int, ready: Conversion) -> bool:
+        """Return whether a scan cell's enable is tied to its mission value or unconnected."""
+        if self._constants is None:
+            self._constants = propagate(self._design, {})
+        pins = self._design.pins(instance)
+        for pin in ready.test_pins:
+            net = pins.get(pin, OPEN)
+            if net != OPEN and self._constants.get(net) != 0:
+                return False
+        return True
+
+
+def _in_use(cell: Cell) -> Refusal:
+    return Refusal(
+        "scan-pins-in-use",
+        f"`{cell.name}` is a scan cell whose scan pins are connected already",
+        "it belongs to an existing chain or uses its scan pins in mission mode; leave it out",
+    )
