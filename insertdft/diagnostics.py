@@ -43,6 +43,7 @@ SLUGS: Final[dict[str, str]] = {
     "net-two-drivers": "A net has more than one driver",
     # library
     "library-syntax": "The library text is not valid Liberty",
+    "library-unsupported": "A construct of the library is understood but not supported",
     "library-empty": "The library holds no cell",
     "library-expression": "A Boolean expression of a cell cannot be read",
     "library-duplicate-cell": "Two library files describe the same cell",
@@ -63,6 +64,7 @@ SLUGS: Final[dict[str, str]] = {
     "chains-too-many": "More chains are asked for than there are cells to put into them",
     "chains-too-few": "Fewer chains are asked for than clock and edge groups need",
     "port-taken": "A name for a new port is already taken",
+    "plan-unreadable": "A plan file is not valid",
     "plan-mismatch": "A plan does not belong to this netlist or library",
     # trace
     "chain-broken": "A scan chain cannot be walked from its scan-out to its scan-in",

@@ -1,1 +1,68 @@
 """Cells, their functions and their scan roles."""
+
+from insertdft.library.cell import (
+    Arc,
+    Cell,
+    Library,
+    Pin,
+    ScanOutput,
+    ScanRole,
+    StateTable,
+    Storage,
+    StorageKind,
+    Style,
+    Table,
+    TestCell,
+    Twin,
+)
+from insertdft.library.finders import (
+    ClockGate,
+    Gate,
+    Latch,
+    Mux,
+    Tie,
+    clock_gate_of,
+    find_buffers,
+    find_clock_gates,
+    find_gates,
+    find_inverters,
+    find_latches,
+    find_muxes,
+    find_ties,
+)
+from insertdft.library.primitives import primitive_cell
+from insertdft.library.read import read_library
+from insertdft.library.twins import check_twin, scan_twins
+
+__all__ = [
+    "Arc",
+    "Cell",
+    "ClockGate",
+    "Gate",
+    "Latch",
+    "Library",
+    "Mux",
+    "Pin",
+    "ScanOutput",
+    "ScanRole",
+    "StateTable",
+    "Storage",
+    "StorageKind",
+    "Style",
+    "Table",
+    "TestCell",
+    "Tie",
+    "Twin",
+    "check_twin",
+    "clock_gate_of",
+    "find_buffers",
+    "find_clock_gates",
+    "find_gates",
+    "find_inverters",
+    "find_latches",
+    "find_muxes",
+    "find_ties",
+    "primitive_cell",
+    "read_library",
+    "scan_twins",
+]

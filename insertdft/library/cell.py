@@ -4,6 +4,7 @@ from collections.abc import Mapping
 from dataclasses import dataclass, field
 from enum import Enum
 
+from insertdft.diagnostics import Diagnostic
 from insertdft.library.expression import Expression
 from insertdft.text import Span
 
@@ -24,9 +25,9 @@ class Storage:
         kind: FLIP_FLOP or LATCH.
         state: Name of the state variable (Liberty's first).
         state_inverted: Name of the inverted state variable (Liberty's second).
-        bits: 1, or the width of a bank.
+        bits: Always 1: a bank of n bits is opened into n of these, ``IQ[0]``, ``IQ[1]``, ...
         data: ``next_state`` of a flip-flop, ``data_in`` of a latch; None if the group has none
-            (a latch of set and reset alone). In a bank, bus names stand for each bit in turn.
+            (a latch of set and reset alone).
         clock: ``clocked_on`` (rising of the expression), or ``enable`` (open while it is true).
         clock_also: ``clocked_on_also`` or ``enable_also``: the slave's own clock.
         clear: State becomes 0 while true.
@@ -194,6 +195,8 @@ class ScanRole:
         clock_a: LSSD: shift clock of L1.
         clock_b: LSSD: clock of L2 (None where the cell is L1 alone).
         bits: Length in shift cycles.
+        off_values: Value at rest of each clock pin named above: 0 for a clock that acts on its
+            rising edge or while it is 1, else 1.
     """
 
     style: Style
@@ -208,6 +211,7 @@ class ScanRole:
     clock_a: str | None = None
     clock_b: str | None = None
     bits: int = 1
+    off_values: tuple[tuple[str, int], ...] = ()
 
 
 @dataclass(frozen=True, slots=True, eq=False)
@@ -226,6 +230,8 @@ class Cell:
         clock_gate: ``clock_gating_integrated_cell`` value, or None.
         dont_use: The library asks not to use it.
         dont_touch: The library asks not to replace it.
+        power_management: It isolates, shifts levels, retains, switches or stays powered; never
+            chosen for anything else.
         footprint: ``cell_footprint`` or None.
         stand_in: Whether it is a behavioural stand-in that we wrote.
         scan: How it shifts, for each style it serves; empty for a plain cell.
@@ -243,6 +249,7 @@ class Cell:
     clock_gate: str | None = None
     dont_use: bool = False
     dont_touch: bool = False
+    power_management: bool = False
     footprint: str | None = None
     stand_in: bool = False
     scan: tuple[ScanRole, ...] = ()
@@ -273,6 +280,7 @@ class Library:
         capacitance_unit_f: Farads of one capacitive unit.
         wire_loads: Wire-load text groups kept for later use, by name.
         twins_by_hand: The user's mapping, plain cell -> scan cell.
+        diagnostics: Warnings of the reading; errors are raised instead.
     """
 
     name: str
@@ -281,6 +289,7 @@ class Library:
     capacitance_unit_f: float = 1e-12
     wire_loads: Mapping[str, str] = field(default_factory=dict, repr=False)
     twins_by_hand: Mapping[str, str] = field(default_factory=dict)
+    diagnostics: tuple[Diagnostic, ...] = field(default=(), repr=False)
 
 
 @dataclass(frozen=True, slots=True)
