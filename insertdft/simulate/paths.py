@@ -69,6 +69,13 @@ class Walker:
         """Return an expression over the pins of ``instance`` with known pins filled in."""
         return self._reducer.reduce(expression, known_pins(self.design, instance, self.values))
 
+    def net_and_parity(self, instance: int, expression: Expression) -> tuple[int, bool] | None:
+        """Return the net that alone decides an expression of ``instance``, and whether inverted.
+
+        None if several pins decide, or none.
+        """
+        return pin_and_parity(self.design, instance, self.literal(instance, expression))
+
     def _walk(self, net: int) -> Source:
         inverted = False
         passed: list[int] = []

@@ -1,0 +1,185 @@
+"""The splices of one module: scan cells in place, chains joined, ports added."""
+
+from collections.abc import Iterator, Mapping
+
+from insertdft.chains.plan import Element, ModulePlan, Plan, Segment
+from insertdft.edit.instance import InstanceEdit, instance_splices
+from insertdft.edit.wires import Wires
+from insertdft.netlist import OPEN, Module, Netlist
+from insertdft.netlist.names import to_verilog
+from insertdft.styles.conversion import DATA, MISSION, SCAN, Conversion
+from insertdft.text import Splice
+
+
+def module_splices(netlist: Netlist, plan: Plan, module: Module) -> list[Splice]:
+    """Return the splices that ``plan`` asks for in one module."""
+    return _Editor(netlist, plan, module).splices()
+
+
+class _Editor:
+    """One module being edited: what each instance gains, what is declared, what is added."""
+
+    def __init__(self, netlist: Netlist, plan: Plan, module: Module) -> None:
+        self._netlist = netlist
+        self._plan = plan
+        self._module = module
+        self._mine: ModulePlan = plan.modules[module.name]
+        self._wires = Wires(module, [*self._port_names()])
+        self._edits: dict[int, InstanceEdit] = {}
+        self._number = _numbers(module, self._mine)
+        self._items: list[str] = []
+
+    def splices(self) -> list[Splice]:
+        for segment in self._mine.segments:
+            self._lay(segment)
+        self._pass_test_nets()
+        found = self._header()
+        for number in sorted(self._edits):
+            found += instance_splices(self._netlist, self._module, number, self._edits)
+        if self._items:
+            text = "".join(f"  {item}\n" for item in self._items)
+            found.append(Splice(self._line_start(), self._line_start(), text, "scan-out ports"))
+        return found
+
+    def _line_start(self) -> int:
+        """Return where the line of ``endmodule`` begins, if nothing but blanks stands before it."""
+        text, end = self._module.source.text, self._module.body_end
+        start = text.rfind("\n", 0, end) + 1
+        return start if not text[start:end].strip() else end
+
+    def _port_names(self) -> Iterator[str]:
+        yield from (self._plan.port_names[net] for net in self._mine.test_nets)
+        for segment in self._mine.segments:
+            yield segment.scan_in
+            yield segment.scan_out
+
+    def _lay(self, segment: Segment) -> None:
+        upstream = segment.scan_in
+        for place, element in enumerate(segment.elements, start=1):
+            is_last = place == len(segment.elements)
+            # The last element drives the port itself where nothing stands between.
+            goal = segment.scan_out if is_last and not segment.connected else None
+            if element.is_segment:
+                upstream = self._pass_through(element, upstream, goal)
+            else:
+                upstream = self._convert(element, upstream, goal)
+        if segment.connected:
+            self._items.append(self._connect(upstream, segment.scan_out))
+
+    def _connect(self, net: str, port: str) -> str:
+        if self._plan.connector is None:
+            return f"assign {port} = {net};"
+        cell, source, output = self._plan.connector
+        name = to_verilog(self._wires.fresh_instance(f"{port}_buf"))
+        return f"{cell} {name} (.{source}({net}), .{output}({port}));"
+
+    def _pass_through(self, element: Element, upstream: str, goal: str | None) -> str:
+        inner = self._plan.modules[self._cell(element.instance)].segments[element.number]
+        edit = self._edit(element.instance)
+        downstream = goal or self._wires.fresh(f"scan_link_{self._wires.count + 1}")
+        edit.added[inner.scan_in] = upstream
+        edit.added[inner.scan_out] = downstream
+        return downstream
+
+    def _convert(self, element: Element, upstream: str, goal: str | None) -> str:
+        conversion = self._plan.conversions[element.number]
+        edit = self._edit(element.instance)
+        edit.cell = conversion.after
+        edit.renamed = conversion.pins
+        edit.why = f"`{element.instance}` joins a chain"
+        if conversion.parts:
+            self._compose(element.instance, conversion, upstream, edit)
+        else:
+            edit.set(conversion.scan_in, upstream)
+        for pin, net in conversion.test_pins.items():
+            edit.set(pin, self._plan.port_names[net])
+        for pin, value in conversion.ties.items():
+            edit.set(pin, f"1'b{value}")
+        return self._tap(element.instance, conversion, edit, goal)
+
+    def _tap(self, name: str, conversion: Conversion, edit: InstanceEdit, goal: str | None) -> str:
+        """Return the net that the next position takes, giving the output one if it has none."""
+        tap = conversion.taps[0].pin
+        old = {new: old for old, new in conversion.pins.items()}.get(tap, tap)
+        net = self._net_at(name, old)
+        if net is not None:
+            return net
+        fresh = goal or self._wires.fresh_beside(name, "scan_q")
+        edit.set(tap, fresh)
+        return fresh
+
+    def _compose(
+        self, name: str, conversion: Conversion, upstream: str, edit: InstanceEdit
+    ) -> None:
+        mission = self._net_at(name, conversion.scan_in)
+        nets = {
+            MISSION: "1'b0" if mission is None else mission,
+            SCAN: upstream,
+            DATA: self._wires.fresh_beside(name, "scan_d"),
+        }
+        nets |= {net.value: port for net, port in self._plan.port_names.items()}
+        edit.set(conversion.scan_in, nets[DATA])
+        for part in conversion.parts:
+            for net in part.pins.values():
+                if net not in nets:
+                    nets[net] = self._wires.fresh_beside(name, f"scan_{net}")
+            pins = ", ".join(f".{pin}({nets[net]})" for pin, net in part.pins.items())
+            part_name = to_verilog(self._wires.fresh_part(name, f"scan_{part.role}"))
+            edit.beside.append(f"{part.cell} {part_name} ({pins});")
+
+    def _pass_test_nets(self) -> None:
+        inner = {at.instance for segment in self._mine.segments for at in segment.elements}
+        for name in sorted(inner, key=self._number.__getitem__):
+            cell = self._cell(name)
+            if cell in self._netlist.modules:
+                for net in self._plan.modules[cell].test_nets:
+                    port = self._plan.port_names[net]
+                    self._edit(name).added[port] = port
+
+    def _edit(self, name: str) -> InstanceEdit:
+        number = self._number[name]
+        return self._edits.setdefault(number, InstanceEdit(f"`{name}` passes a chain on"))
+
+    def _cell(self, name: str) -> str:
+        return self._netlist.cell_names[int(self._module.instance_cell[self._number[name]])]
+
+    def _net_at(self, name: str, pin: str) -> str | None:
+        """Return the text of the net at a pin of an instance, None if there is none."""
+        number = self._number[name]
+        module, names = self._module, self._netlist.pin_names
+        for row in range(int(module.pin_start[number]), int(module.pin_start[number + 1])):
+            net = int(module.pin_net[row])
+            if names[int(module.pin_name[row])] == pin and net != OPEN:
+                return to_verilog(module.net_name(net))
+        return None
+
+    def _header(self) -> list[Splice]:
+        """Return the splices that add ports and declare wires."""
+        header = self._module.header
+        ports = self._directions()
+        if header.ansi:
+            listed = [f"{direction} {name}" for name, direction in ports.items()]
+            declared = []
+        else:
+            listed = list(ports)
+            declared = [f"{direction} {name};" for name, direction in ports.items()]
+        declared += self._wires.declarations()
+        joined = ",\n  ".join(listed)
+        if header.list_end is None:
+            listing = Splice(header.end - 1, header.end - 1, f" (\n  {joined}\n)", "new ports")
+        else:
+            lead = "" if header.list_empty else ",\n  "
+            listing = Splice(header.list_end, header.list_end, lead + joined, "new ports")
+        text = "".join(f"\n  {line}" for line in declared)
+        return [listing, Splice(header.end, header.end, text, "declarations")][: 1 + bool(text)]
+
+    def _directions(self) -> Mapping[str, str]:
+        outputs = {segment.scan_out for segment in self._mine.segments}
+        return {at: "output" if at in outputs else "input" for at in self._port_names()}
+
+
+def _numbers(module: Module, plan: ModulePlan) -> dict[str, int]:
+    """Return the instance ids of the names that the plan speaks of."""
+    wanted = {at.instance for segment in plan.segments for at in segment.elements}
+    names = enumerate(module.instance_names)
+    return {name: number for number, name in names if name in wanted}
