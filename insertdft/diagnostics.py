@@ -48,6 +48,7 @@ SLUGS: Final[dict[str, str]] = {
     "library-expression": "A Boolean expression of a cell cannot be read",
     "library-duplicate-cell": "Two library files describe the same cell",
     "cell-model-unsupported": "The behaviour of a cell model cannot be derived",
+    "scan-role-wrong": "What a cell declares about its scan pins does not fit its function",
     "cell-map-wrong": "A hand-made cell mapping does not fit the library",
     # survey
     "no-storage": "The design has no storage cell",

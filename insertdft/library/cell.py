@@ -197,6 +197,8 @@ class ScanRole:
         bits: Length in shift cycles.
         off_values: Value at rest of each clock pin named above: 0 for a clock that acts on its
             rising edge or while it is 1, else 1.
+        data_2: LSSD with L1/L2*: system data pin of L2.
+        clock_2: LSSD with L1/L2*: system clock pin of L2.
     """
 
     style: Style
@@ -212,6 +214,8 @@ class ScanRole:
     clock_b: str | None = None
     bits: int = 1
     off_values: tuple[tuple[str, int], ...] = ()
+    data_2: str | None = None
+    clock_2: str | None = None
 
 
 @dataclass(frozen=True, slots=True, eq=False)

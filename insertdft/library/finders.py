@@ -167,18 +167,14 @@ def _mux(cell: str, output: str, function: Expression) -> list[Mux]:
 
 
 def find_ties(library: Library, value: int) -> tuple[Tie, ...]:
-    """Return the outputs that are constantly ``value``, of cells without inputs.
-
-    A cell with one output comes before a cell with two.
-    """
-    found = [
-        (len(cell.outputs()), Tie(cell.name, pin.name, value))
+    """Return the outputs that are constantly ``value``, of cells without inputs."""
+    return tuple(
+        Tie(cell.name, pin.name, value)
         for cell in _usable(library)
         if not cell.inputs()
         for pin in cell.outputs()
         if pin.function is not None and pruned(pin.function) == Const(value == 1)
-    ]
-    return tuple(tie for _, tie in sorted(found, key=lambda item: item[0]))
+    )
 
 
 def find_latches(library: Library, active: int) -> tuple[Latch, ...]:

@@ -45,9 +45,11 @@ def read_library(
     problems += own
     if not merged.cells:
         raise DesignError([error("library-empty", "no cell was found in the library files")])
+    cells, own = with_roles(merged.cells)
+    problems += own
     return replace(
         merged,
-        cells=with_roles(merged.cells),
+        cells=cells,
         twins_by_hand=dict(twins_by_hand),
         diagnostics=tuple(problems),
     )

@@ -2,71 +2,97 @@
 
 from collections.abc import Mapping
 from dataclasses import replace
+from typing import Final
 
+from insertdft.diagnostics import Diagnostic, Severity
 from insertdft.library.cell import Cell, ScanRole, Storage, StorageKind
-from insertdft.library.expression import And, Not, Or, Var
-from insertdft.library.scan_mux import (
+from insertdft.library.declared import (
     LibraryHints,
-    choose_shift,
-    declared,
     library_hints,
-    mux_role,
-    shifts,
+    only_pin,
+    pins_with,
+    signals,
 )
+from insertdft.library.expression import And, Expression, Not, Or, Var, negation
+from insertdft.library.scan_latch import latch_role
+from insertdft.library.scan_mux import choose_shift, mux_role, shifts
+from insertdft.library.scan_table import table_role
+from insertdft.library.table_storage import storages_of
+
+_HINT: Final = "the cell is taken as a plain one; correct a copy of the library to use it for scan"
 
 
-def with_roles(cells: Mapping[str, Cell]) -> dict[str, Cell]:
-    """Return the cells with ``scan`` filled, from their functions and declarations."""
+def with_roles(cells: Mapping[str, Cell]) -> tuple[dict[str, Cell], list[Diagnostic]]:
+    """Return the cells with ``scan`` filled, from their functions and declarations.
+
+    Also fills the storage of cells whose state table is latches or a flip-flop, and of those that
+    have a ``test_cell`` alone.
+    """
     completed = {name: _with_storage(cell) for name, cell in cells.items()}
     hints = library_hints(list(completed.values()))
-    return {name: _with_roles(cell, hints) for name, cell in completed.items()}
+    found: dict[str, Cell] = {}
+    problems: list[Diagnostic] = []
+    for name, cell in completed.items():
+        roles = _roles(cell, hints) if cell.clock_gate is None else ()
+        found[name] = replace(cell, scan=roles) if roles else cell
+        if not roles and cell.is_storage and pins_with(cell, "test_scan_in"):
+            problems.append(_not_confirmed(cell))
+    return found, problems
 
 
-def _with_roles(cell: Cell, hints: LibraryHints) -> Cell:
-    if cell.clock_gate is not None:
-        return cell
-    roles = _mux_roles(cell, hints)
-    return replace(cell, scan=roles) if roles else cell
-
-
-def _mux_roles(cell: Cell, hints: LibraryHints) -> tuple[ScanRole, ...]:
+def _roles(cell: Cell, hints: LibraryHints) -> tuple[ScanRole, ...]:
     shift = choose_shift(cell, shifts(cell), hints)
-    role = mux_role(cell, shift) if shift else None
-    return (role,) if role else ()
+    found = [
+        mux_role(cell, shift) if shift else None,
+        latch_role(cell, hints),
+        table_role(cell),
+    ]
+    return tuple(role for role in found if role is not None)
+
+
+def _not_confirmed(cell: Cell) -> Diagnostic:
+    pins = ", ".join(f"`{pin}` {signal}" for pin, signal in signals(cell).items())
+    message = f"the function of `{cell.name}` does not do what its pins declare: {pins}"
+    return Diagnostic("scan-role-wrong", Severity.WARNING, message, cell.span, _HINT)
 
 
 def _with_storage(cell: Cell) -> Cell:
+    if cell.storage:
+        return cell
+    if cell.state_table is not None:
+        found = storages_of(cell.state_table)
+        return replace(cell, storage=found) if found else cell
+    return _from_test_cell(cell)
+
+
+def _from_test_cell(cell: Cell) -> Cell:
     """Give a cell that has only a test_cell the storage that its declarations say.
 
     Its next state is then ``scan_enable ? scan_in : mission``; inverted pins are inverted.
     """
     test = cell.test_cell
-    if cell.storage or cell.state_table or test is None or len(test.storage) != 1:
+    if test is None or len(test.storage) != 1 or cell.clock_gate is not None:
         return cell
     mission = test.storage[0]
-    scan_in, enable = declared(cell, "in"), declared(cell, "enable")
-    if len(scan_in) != 1 or len(enable) != 1 or mission.data is None:
+    scan_in, enable = only_pin(cell, "test_scan_in"), only_pin(cell, "test_scan_enable")
+    if scan_in is None or enable is None or mission.data is None:
         return cell
     if mission.kind is not StorageKind.FLIP_FLOP:
         return cell
-    storage = replace(mission, data=_shifted(cell, mission, *scan_in, *enable))
+    data = _shifted(cell, mission.data, scan_in, enable)
     pins = {
         name: replace(pin, function=pin.function or test.functions.get(name))
         for name, pin in cell.pins.items()
     }
+    storage: Storage = replace(mission, data=data)
     return replace(cell, storage=(storage,), pins=pins)
 
 
-def _shifted(cell: Cell, mission: Storage, scan_in: str, enable: str) -> Or:
-    signals = cell.test_cell.signal_types if cell.test_cell else {}
+def _shifted(cell: Cell, mission: Expression, scan_in: str, enable: str) -> Expression:
+    declared = signals(cell)
 
-    def pin(name: str) -> Var | Not:
-        return Not(Var(name)) if signals.get(name, "").endswith("_inverted") else Var(name)
+    def meaning(name: str) -> Expression:
+        return Not(Var(name)) if declared[name].endswith("_inverted") else Var(name)
 
-    def inverse(name: str) -> Var | Not:
-        return Var(name) if signals.get(name, "").endswith("_inverted") else Not(Var(name))
-
-    data = mission.data
-    if data is None:
-        raise RuntimeError(f"`{cell.name}` has no mission data")
-    return Or((And((pin(enable), pin(scan_in))), And((inverse(enable), data))))
+    on = meaning(enable)
+    return Or((And((on, meaning(scan_in))), And((negation(on), mission))))

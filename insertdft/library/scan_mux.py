@@ -6,11 +6,11 @@ but on some other input. ``s ? a : b`` fits twice, and a plain cell with a data 
 too; what the library declares decides then (``choose_shift``).
 """
 
-from collections.abc import Sequence
 from dataclasses import dataclass
 from typing import Final
 
 from insertdft.library.cell import Cell, ScanOutput, ScanRole, Storage, StorageKind, Style
+from insertdft.library.declared import LibraryHints, pins_with, test_only_outputs
 from insertdft.library.expression import Const, Expression, substitute
 from insertdft.library.functions import cofactor, inputs_of, literal, pruned, same, support
 
@@ -42,46 +42,6 @@ class Shift:
         """Return the only input the mission next state is made of, or None."""
         found = [literal(item) for item in self.mission]
         return found[0][0] if len(found) == 1 and found[0] is not None else None
-
-
-@dataclass(frozen=True, slots=True)
-class LibraryHints:
-    """What the library as a whole says about scan.
-
-    Attributes:
-        declared: Whether any cell declares scan pins.
-        plain_data: Data pins of the flip-flops whose next state is one pin.
-    """
-
-    declared: bool
-    plain_data: frozenset[str]
-
-
-def library_hints(cells: Sequence[Cell]) -> LibraryHints:
-    """Return what all cells together say."""
-    plain = set()
-    for cell in cells:
-        for storage in cell.storage:
-            if storage.kind is StorageKind.FLIP_FLOP and storage.data is not None:
-                found = literal(storage.data)
-                plain |= {found[0]} if found else set()
-    return LibraryHints(any(_declares(cell) for cell in cells), frozenset(plain))
-
-
-def _declares(cell: Cell) -> bool:
-    return bool(declared(cell, "in") or declared(cell, "enable"))
-
-
-def declared(cell: Cell, what: str) -> frozenset[str]:
-    """Return the pins declared as scan input (``in``) or scan enable (``enable``)."""
-    test = cell.test_cell.signal_types if cell.test_cell else {}
-    signal, state = f"test_scan_{what}", f"scan_{what}"
-    return frozenset(
-        pin.name
-        for pin in cell.pins.values()
-        if (test.get(pin.name) or pin.signal_type or "") in (signal, f"{signal}_inverted")
-        or pin.nextstate_type == state
-    )
 
 
 def shifts(cell: Cell) -> list[Shift]:
@@ -159,17 +119,14 @@ def choose_shift(cell: Cell, found: list[Shift], hints: LibraryHints) -> Shift |
         return chosen[0] if len(chosen) == 1 else None
     if len(found) == 1:
         return found[0]
-    plain = [
-        shift
-        for shift in found
-        if shift.data_pin() in hints.plain_data and shift.scan_in not in hints.plain_data
-    ]
+    names = hints.plain_data[StorageKind.FLIP_FLOP]
+    plain = [shift for shift in found if shift.data_pin() in names and shift.scan_in not in names]
     return plain[0] if len(plain) == 1 else None
 
 
 def _score(cell: Cell, shift: Shift) -> int:
-    score = 2 * (shift.scan_in in declared(cell, "in"))
-    score += 2 * (shift.enable in declared(cell, "enable"))
+    score = 2 * (shift.scan_in in pins_with(cell, "test_scan_in"))
+    score += 2 * (shift.enable in pins_with(cell, "test_scan_enable"))
     test = cell.test_cell
     if test and len(test.storage) == len(shift.mission):
         own = [storage.data for storage in test.storage]
@@ -204,7 +161,7 @@ def scan_outputs(cell: Cell, shift: Shift) -> tuple[ScanOutput, ...]:
     last = next(s for s in cell.storage if s.state == shift.order[-1])
     inverses = {last.state: False, last.state_inverted: True}
     held: dict[str, Expression] = {shift.enable: Const(shift.value == 1)}
-    only = cell.test_cell.test_output_only if cell.test_cell else frozenset()
+    only = test_only_outputs(cell)
     found: list[ScanOutput] = []
     for pin in cell.outputs():
         if pin.function is None or pin.three_state is not None:
@@ -213,6 +170,6 @@ def scan_outputs(cell: Cell, shift: Shift) -> tuple[ScanOutput, ...]:
         if shown is None or shown[0] not in inverses:
             continue
         gated = shift.enable in support(pin.function)
-        test_only = pin.test_output_only or pin.name in only or gated
-        found.append(ScanOutput(pin.name, inverses[shown[0]] ^ shown[1], test_only))
+        inverted = inverses[shown[0]] ^ shown[1]
+        found.append(ScanOutput(pin.name, inverted, pin.name in only or gated))
     return tuple(sorted(found, key=lambda item: not item.test_only))
