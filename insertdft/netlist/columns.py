@@ -129,6 +129,8 @@ class Module:
         assign_right: Shape (k,), the net (or constant) that drives it.
         assign_start: Shape (k,), offset of the statement.
         parameters: Instance id -> text of its parameter overrides.
+        code: The text that was read: that of ``source`` with blanks for directives and for
+            branches not taken, so that offsets mean the same in both.
     """
 
     name: str
@@ -152,6 +154,7 @@ class Module:
     assign_right: Ids = field(repr=False)
     assign_start: Offsets = field(repr=False)
     parameters: Mapping[int, str] = field(repr=False)
+    code: str = field(default="", repr=False)
 
     def span(self, instance: int) -> Span:
         """Return the place of the statement of ``instance``, from its cell name on."""

@@ -1,0 +1,96 @@
+r"""The words of Verilog text: patterns that every file here shares, and a tokeniser for odd text.
+
+Bulk text is never cut into tokens; ``statements.py`` answers it by one pattern. What is left comes
+through here, and comments and attributes drop out.
+
+Patterns use possessive quantifiers (``*+``), so none can backtrack: time is linear in the text.
+"""
+
+import re
+from collections.abc import Iterator, Mapping
+from typing import Final, NamedTuple
+
+#: An identifier. An escaped one ends at white space, which is not part of it.
+NAME: Final = r"(?:[A-Za-z_][\w$]*+|\\\S++)"
+STRING: Final = r'"(?:[^"\\\n]++|\\(?s:.))*+"'
+COMMENT: Final = r"(?://[^\n]*+|/\*(?s:.*?)\*/)"
+ATTRIBUTE: Final = rf'\(\*(?!\s*+\))(?:[^"*]++|{STRING}|\*(?!\)))*+\*\)'
+#: White space, comments and attributes, as much as there is.
+GAP: Final = rf"(?:\s++|{COMMENT}|{ATTRIBUTE})*+"
+
+_SIZED = r"(?:\d[\d_]*+\s*+)?'\s*+[sS]?[bBoOdDhH]\s*+[0-9a-fA-FxXzZ?_]++"
+_REAL = r"\d[\d_]*+(?:\.\d[\d_]*+)?[eE][+-]?\d[\d_]*+|\d[\d_]*+\.\d[\d_]*+"
+_OPERATOR = (
+    r"<<<|>>>|===|!==|\|\||&&|~\||~&|~\^|\^~|<<|>>|==|!=|<=|>=|\*\*|\+:|-:"
+    r"|[][(){},;:.#@?=+\-*/%&|^~!<>$]"
+)
+TOKEN: Final = re.compile(
+    rf"(?P<gap>\s++|{COMMENT}|{ATTRIBUTE})|(?P<name>{NAME})|(?P<sized>{_SIZED})|(?P<real>{_REAL})"
+    rf"|(?P<number>\d[\d_]*+)|(?P<string>{STRING})|(?P<macro>`{NAME})|(?P<operator>{_OPERATOR})",
+    re.ASCII,
+)
+
+
+class Token(NamedTuple):
+    """One word of the text.
+
+    Attributes:
+        kind: ``name``, ``sized``, ``real``, ``number``, ``string``, ``operator`` or ``unknown``.
+        text: As written; a sized constant without blanks, an escaped name without closing blank.
+        start: Offset of its first character; of the macro use for what a macro stands for.
+        end: Offset behind it.
+    """
+
+    kind: str
+    text: str
+    start: int
+    end: int
+
+
+def tokens(code: str, start: int, end: int, macros: Mapping[str, str]) -> Iterator[Token]:
+    """Yield the tokens between two offsets, macro uses replaced by what they stand for.
+
+    A character that starts no token comes out as one of kind ``unknown``.
+    """
+    at = start
+    while at < end:
+        match = TOKEN.match(code, at, end)
+        if match is None:
+            yield Token("unknown", code[at], at, at + 1)
+            at += 1
+            continue
+        at = match.end()
+        kind = match.lastgroup
+        if kind == "macro":
+            body = macros.get(match[0][1:], "")
+            for word in tokens(body, 0, len(body), {}):
+                yield word._replace(start=match.start(), end=at)
+        elif kind == "sized":
+            yield Token("sized", "".join(match[0].split()), match.start(), at)
+        elif kind and kind != "gap":
+            yield Token(kind, match[0], match.start(), at)
+
+
+def matching(words: list[Token], opening: int) -> int:
+    """Return the index of the ``)`` that closes the ``(`` at index ``opening``, or -1."""
+    depth = 0
+    for index in range(opening, len(words)):
+        if words[index].kind == "operator":
+            depth += (words[index].text in "([{") - (words[index].text in ")]}")
+            if depth == 0:
+                return index
+    return -1
+
+
+def split_commas(words: list[Token]) -> list[list[Token]]:
+    """Return the stretches between the commas that stand in no bracket."""
+    parts: list[list[Token]] = [[]]
+    depth = 0
+    for word in words:
+        if word.kind == "operator":
+            depth += (word.text in "([{") - (word.text in ")]}")
+        if depth == 0 and word.text == "," and word.kind == "operator":
+            parts.append([])
+        else:
+            parts[-1].append(word)
+    return parts

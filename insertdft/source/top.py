@@ -1,0 +1,93 @@
+"""Which module is the top, and that no module contains itself."""
+
+from collections.abc import Mapping, Sequence
+
+import networkx as nx
+import numpy as np
+
+from insertdft.diagnostics import DesignError, Diagnostic, Severity, error, nearest
+from insertdft.netlist import Module
+from insertdft.text import Span
+
+
+def find_top(modules: Mapping[str, Module], cell_names: Sequence[str], top: str | None) -> str:
+    """Return the kept name of the top module.
+
+    Raises:
+        DesignError: A module contains itself, the named top does not exist, or several modules
+            could be the top and none is named.
+    """
+    children = {name: _children(module, modules, cell_names) for name, module in modules.items()}
+    _refuse_cycles(modules, children)
+    if top is not None:
+        if top in modules:
+            return top
+        names = ", ".join(f"`{name}`" for name in modules)
+        raise DesignError(
+            [
+                error(
+                    "top-unknown",
+                    f"the netlist has no module `{top}`",
+                    hint=nearest(top, modules) or f"it has {names}",
+                )
+            ]
+        )
+    instanced = {child for names in children.values() for child in names}
+    roots = [name for name in modules if name not in instanced]
+    if len(roots) == 1:
+        return roots[0]
+    raise DesignError([_several(modules, roots)])
+
+
+def _children(
+    module: Module, modules: Mapping[str, Module], cell_names: Sequence[str]
+) -> dict[str, int]:
+    """Return the modules that ``module`` instances, with the first instance of each."""
+    cells, first = np.unique(module.instance_cell, return_index=True)
+    return {
+        cell_names[cell]: place
+        for cell, place in zip(cells.tolist(), first.tolist(), strict=True)
+        if cell_names[cell] in modules
+    }
+
+
+def _refuse_cycles(
+    modules: Mapping[str, Module], children: Mapping[str, Mapping[str, int]]
+) -> None:
+    graph: nx.DiGraph[str] = nx.DiGraph()
+    graph.add_nodes_from(children)
+    graph.add_edges_from((name, child) for name, inner in children.items() for child in inner)
+    try:
+        cycle = nx.find_cycle(graph)
+    except nx.NetworkXNoCycle:
+        return
+    places = [modules[edge[0]].span(children[edge[0]][edge[1]]) for edge in cycle]
+    path = " -> ".join(f"`{edge[0]}`" for edge in [*cycle, cycle[0]])
+    raise DesignError(
+        [
+            Diagnostic(
+                "module-cycle",
+                Severity.ERROR,
+                f"module `{cycle[0][0]}` contains itself: {path}",
+                places[0],
+                hint="take one of the instances out",
+                also=tuple((span, "and on from here") for span in places[1:]),
+            )
+        ]
+    )
+
+
+def _several(modules: Mapping[str, Module], roots: Sequence[str]) -> Diagnostic:
+    names = " or ".join(f"`{name}`" for name in roots)
+    spans = [(_header(modules[name]), f"`{name}` is instanced nowhere") for name in roots]
+    return Diagnostic(
+        "top-unknown",
+        Severity.ERROR,
+        f"{len(roots)} modules could be the top: {names}",
+        hint="say which one with --top",
+        also=tuple(spans),
+    )
+
+
+def _header(module: Module) -> Span:
+    return Span(module.source, module.start, module.header.end)
