@@ -113,6 +113,15 @@ def from_table(table: int, names: Sequence[str], care: int | None = None) -> Exp
     return _shannon(table, care, list(names), ones)
 
 
+def within(function: Expression, condition: Expression) -> Expression:
+    """Return a simple function that equals ``function`` wherever ``condition`` holds."""
+    names = tuple(dict.fromkeys((*variables(function), *variables(condition))))
+    if len(names) > MOST_VARIABLES:
+        return function
+    table, care = truth_table(function, names), truth_table(condition, names)
+    return pruned(from_table(table, names, care))
+
+
 def _shannon(table: int, care: int, names: list[str], ones: int) -> Expression:
     if table & care == 0:
         return Const(False)

@@ -4,9 +4,9 @@ from collections.abc import Collection, Iterable, Mapping
 from dataclasses import dataclass, replace
 from typing import Final
 
-from insertdft.library.cell import Cell, ScanRole, Storage, Style
+from insertdft.library.cell import Cell, ScanRole, Storage, StorageKind, Style
 from insertdft.library.expression import And, Const, Expression, Not, Or, Var, negation
-from insertdft.library.functions import renamed, same, support
+from insertdft.library.functions import choose, renamed, same, support
 
 _NEVER: Final = Const(False)
 
@@ -124,10 +124,18 @@ def same_storage(
     own = None if first.data is None else one_state(first.data, first)
     if (own is None) != (data is None) or first.kind is not second.kind:
         return False
-    changed = replace(second, clear=other(second.clear), preset=other(second.preset))
+    changed = replace(
+        second,
+        data=data,
+        clock=other(second.clock),
+        clear=other(second.clear),
+        preset=other(second.preset),
+    )
+    if first.kind is StorageKind.LATCH and not (first.clock_also or second.clock_also):
+        return _same_latch(replace(first, data=own), changed, inverted=inverted)
     variables = (first.state, first.state_inverted)
     return (
-        same(first.clock or _NEVER, other(second.clock))
+        same(first.clock or _NEVER, changed.clock or _NEVER)
         and same(first.clock_also or _NEVER, other(second.clock_also))
         and (own is None or data is None or same(own, data))
         and all(
@@ -178,3 +186,20 @@ def _same_forced(first: _Forced, second: _Forced) -> bool:
         (_NEVER, second.open),
     )
     return all(same(And((known, one)), And((known, two))) for one, two in pairs)
+
+
+def _same_latch(first: Storage, second: Storage, *, inverted: bool) -> bool:
+    """Return whether two latches come to the same rest, for all inputs and both states."""
+    one, two = _forced(first, 0), _forced(second, int(inverted))
+    known = negation(one.open)
+    pairs = ((_rest(first, one), _rest(second, two, first)), (_NEVER, two.open))
+    return all(same(And((known, own)), And((known, other))) for own, other in pairs)
+
+
+def _rest(latch: Storage, forced: _Forced, named: Storage | None = None) -> Expression:
+    """Return the value at rest, over inputs and the state variable of ``named``."""
+    state = Var((named or latch).state)
+    enable = latch.clock or _NEVER
+    free = choose(enable, latch.data or state, state)
+    kept = choose(forced.kept, state, choose(forced.low, Const(False), free))
+    return renamed(choose(forced.high, Const(True), kept), {})

@@ -17,7 +17,7 @@ from insertdft.library.expression import And, Expression, Not, Or, Var, negation
 from insertdft.library.scan_latch import latch_role
 from insertdft.library.scan_mux import choose_shift, mux_role, shifts
 from insertdft.library.scan_table import table_role
-from insertdft.library.table_storage import storages_of
+from insertdft.library.state_table import table_storages
 
 _HINT: Final = "the cell is taken as a plain one; correct a copy of the library to use it for scan"
 
@@ -60,7 +60,7 @@ def _with_storage(cell: Cell) -> Cell:
     if cell.storage:
         return cell
     if cell.state_table is not None:
-        found = storages_of(cell.state_table)
+        found = table_storages(cell.state_table)
         return replace(cell, storage=found) if found else cell
     return _from_test_cell(cell)
 

@@ -14,7 +14,8 @@ from insertdft.library.cell import Cell, ScanOutput, ScanRole, Storage, Style
 from insertdft.library.declared import only_pin, test_only_outputs
 from insertdft.library.expression import Expression, evaluate
 from insertdft.library.functions import literal, support
-from insertdft.library.state_table import TableModel, Value, patterns
+from insertdft.library.state_table import TableModel
+from insertdft.library.stepping import Value, patterns
 
 
 @dataclass(frozen=True, slots=True)
@@ -88,7 +89,7 @@ def _known(cell: Cell, claim: _Claim, model: TableModel) -> bool:
     names = {claim.scan_in, *claim.clocks}
     for expression in (mission.clock, mission.data):
         names |= set(support(expression)) & cell.pins.keys() if expression is not None else set()
-    return names <= set(model.table.inputs)
+    return names <= set(model.inputs)
 
 
 def _confirmed(
@@ -101,7 +102,7 @@ def _confirmed(
     rest = {**off, clock[0]: int(clock[1])}
     data = claim.mission.data
     moving = {claim.scan_in, *rest, *(support(data) if data is not None else ())}
-    others = [name for name in model.table.inputs if name not in moving]
+    others = [name for name in model.inputs if name not in moving]
     for held in patterns(others):
         shown = _shift_outputs(cell, claim, model, rest, held)
         if shown and (data is None or _captures(cell, claim, model, rest, held)):
@@ -182,10 +183,10 @@ def _runs(
 
     The nodes are those right after the last leading edge.
     """
-    free = [name for name in model.table.inputs if name not in rest and name not in held]
+    free = [name for name in model.inputs if name not in rest and name not in held]
     found = []
     for data in patterns(free):
-        for before in patterns(model.table.nodes):
+        for before in patterns(model.nodes):
             idle = {**held, **data, **rest}
             nodes: dict[str, Value] = model.settle(idle, idle, before)
             after = nodes

@@ -5,14 +5,13 @@ one, with the first sides of all such tokens and with the second sides. A combin
 covers gives an unknown (Liberty Reference Manual, "statetable"; the order of rows is from memory).
 """
 
-from collections.abc import Iterator, Mapping, Sequence
-from itertools import product
+from collections.abc import Mapping
+from functools import lru_cache
 from typing import Final, NamedTuple
 
-from insertdft.library.cell import StateTable
+from insertdft.library.cell import StateTable, Storage
+from insertdft.library.stepping import Value, storages_of
 
-Value = int | None
-_EDGES: Final = frozenset(("R", "F", "~R", "~F"))
 #: Steps until a level-sensitive table must be at rest.
 _MOST_STEPS: Final = 8
 
@@ -46,8 +45,14 @@ def edge_inputs(table: StateTable) -> tuple[str, ...]:
     return tuple(
         name
         for position, name in enumerate(table.inputs)
-        if any(row[0][position] in _EDGES for row in table.rows)
+        if any(row[0][position].strip("~") in ("R", "F") for row in table.rows)
     )
+
+
+@lru_cache(maxsize=256)
+def table_storages(table: StateTable) -> tuple[Storage, ...]:
+    """Return the latches or the flip-flop that a table is; empty if it is neither."""
+    return storages_of(TableModel(table), edge_inputs(table))
 
 
 class TableModel:
@@ -55,13 +60,14 @@ class TableModel:
 
     def __init__(self, table: StateTable) -> None:
         """Expand the rows once."""
-        self.table = table
+        self.inputs = table.inputs
+        self.nodes = table.nodes
         self._rows = expanded_rows(table)
 
     def step(
         self, before: Mapping[str, int], after: Mapping[str, int], nodes: Mapping[str, Value]
     ) -> dict[str, Value]:
-        """Return the nodes after the inputs went from ``before`` to ``after``.
+        """Return the nodes one step after the inputs went from ``before`` to ``after``.
 
         Args:
             before: Value of each input until now.
@@ -70,9 +76,9 @@ class TableModel:
         """
         for row in self._rows:
             if self._matches(row, before, after, nodes):
-                pairs = zip(self.table.nodes, row.following, strict=True)
+                pairs = zip(self.nodes, row.following, strict=True)
                 return {name: _following(token, nodes[name]) for name, token in pairs}
-        return dict.fromkeys(self.table.nodes)
+        return dict.fromkeys(self.nodes)
 
     def settle(
         self, before: Mapping[str, int], after: Mapping[str, int], nodes: Mapping[str, Value]
@@ -84,7 +90,7 @@ class TableModel:
             if following == found:
                 return found
             found = following
-        return dict.fromkeys(self.table.nodes)
+        return dict.fromkeys(self.nodes)
 
     def _matches(
         self,
@@ -93,8 +99,8 @@ class TableModel:
         after: Mapping[str, int],
         nodes: Mapping[str, Value],
     ) -> bool:
-        inputs = zip(self.table.inputs, row.inputs, strict=True)
-        current = zip(self.table.nodes, row.current, strict=True)
+        inputs = zip(self.inputs, row.inputs, strict=True)
+        current = zip(self.nodes, row.current, strict=True)
         return all(_input_fits(token, before[name], after[name]) for name, token in inputs) and all(
             _node_fits(token, nodes[name]) for name, token in current
         )
@@ -115,9 +121,3 @@ def _following(token: str, value: Value) -> Value:
     if token == "N":
         return value
     return {"L": 0, "H": 1}.get(token)
-
-
-def patterns(names: Sequence[str]) -> Iterator[dict[str, int]]:
-    """Yield every assignment of 0 and 1 to ``names``; the first name changes fastest."""
-    for values in product((0, 1), repeat=len(names)):
-        yield dict(zip(names, reversed(values), strict=True))

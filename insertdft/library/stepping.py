@@ -1,0 +1,246 @@
+"""Storage found by experiment: a black box is stepped through all inputs and states.
+
+State tables of Liberty and user-defined primitives of Verilog are such boxes. What comes out is the
+same function for every input and every state; a box that is neither latch nor flip-flop gives
+nothing.
+"""
+
+from collections.abc import Iterator, Mapping, Sequence
+from itertools import product
+from typing import Final, NamedTuple, Protocol
+
+from insertdft.library.cell import Storage, StorageKind
+from insertdft.library.expression import Const, Expression, Not, Or, Var, negation
+from insertdft.library.functions import cofactor, from_table, pruned, support, within
+
+Value = int | None
+
+#: Larger boxes are left as they are.
+MOST_INPUTS: Final = 9
+MOST_NODES: Final = 3
+
+
+class Steps(Protocol):
+    """Something with inputs and state that can be stepped."""
+
+    @property
+    def inputs(self) -> tuple[str, ...]:
+        """Names of the inputs."""
+
+    @property
+    def nodes(self) -> tuple[str, ...]:
+        """Names of the state nodes."""
+
+    def settle(
+        self, before: Mapping[str, int], after: Mapping[str, int], nodes: Mapping[str, Value]
+    ) -> dict[str, Value]:
+        """Return the nodes at rest after the inputs changed; None for unknown."""
+
+
+def patterns(names: Sequence[str]) -> Iterator[dict[str, int]]:
+    """Yield every assignment of 0 and 1 to ``names``; the first name changes fastest."""
+    for values in product((0, 1), repeat=len(names)):
+        yield dict(zip(names, reversed(values), strict=True))
+
+
+def storages_of(box: Steps, edges: tuple[str, ...]) -> tuple[Storage, ...]:
+    """Return the storage elements that a box is, one a node; empty if it is something else.
+
+    Args:
+        box: What to step.
+        edges: Inputs that it is sensitive to at an edge.
+    """
+    if len(box.inputs) > MOST_INPUTS or not 0 < len(box.nodes) <= MOST_NODES:
+        return ()
+    if not edges:
+        return _latches(box)
+    if len(edges) == 1 and len(box.nodes) == 1:
+        found = _flip_flop(box, edges[0])
+        return (found,) if found else ()
+    return ()
+
+
+def edge_inputs(box: Steps) -> tuple[str, ...]:
+    """Return the inputs whose change does more than their new value alone would."""
+    return tuple(name for name in box.inputs if _acts_at_edge(box, name))
+
+
+def _acts_at_edge(box: Steps, name: str) -> bool:
+    others = [item for item in box.inputs if item != name]
+    for held in patterns(others):
+        for nodes in patterns(box.nodes):
+            for value in (0, 1):
+                before, after = {**held, name: 1 - value}, {**held, name: value}
+                moved, still = box.settle(before, after, nodes), box.settle(after, after, nodes)
+                if any(moved[node] not in (None, still[node]) for node in box.nodes):
+                    return True
+    return False
+
+
+def latch_of(
+    following: Expression, state: str, inverse: str, inputs: Sequence[str]
+) -> Storage | None:
+    """Return the latch with a given next state, or None if it is none.
+
+    A pin that alone forces a value, whatever the other pins, becomes clear or preset; the first
+    found dominates.
+
+    Args:
+        following: Value at rest, over inputs and ``state``.
+        state: Name of the state variable.
+        inverse: Name for its inverse.
+        inputs: Pins, in the order in which clear and preset are looked for.
+    """
+    forced: dict[bool, list[Expression]] = {False: [], True: []}
+    dominant: bool | None = None
+    rest = pruned(following)
+    if state not in support(rest):
+        return None
+    for name, value in product(inputs, (0, 1)):
+        held = cofactor(rest, name, value)
+        if isinstance(held, Const):
+            dominant = held.value if dominant is None else dominant
+            forced[held.value].append(Var(name) if value else Not(Var(name)))
+            rest = cofactor(rest, name, 1 - value)
+    when0, when1 = cofactor(rest, state, 0), cofactor(rest, state, 1)
+    if pruned(_and(when0, negation(when1))) != Const(False):
+        return None  # it would oscillate
+    enable = pruned(Or((when0, negation(when1))))
+    return Storage(
+        StorageKind.LATCH,
+        state,
+        inverse,
+        1,
+        within(when0, enable) if enable != Const(False) else None,
+        enable if enable != Const(False) else None,
+        clear=_any(forced[False]),
+        preset=_any(forced[True]),
+        clear_preset=("H", "L") if dominant else ("L", "H"),
+    )
+
+
+def _and(first: Expression, second: Expression) -> Expression:
+    return negation(Or((negation(first), negation(second))))
+
+
+def _any(parts: list[Expression]) -> Expression | None:
+    if not parts:
+        return None
+    return parts[0] if len(parts) == 1 else Or(tuple(parts))
+
+
+class _Rest(NamedTuple):
+    """Where a box comes to rest: (nodes before, nodes at rest) by inputs."""
+
+    inputs: dict[str, int]
+    outcomes: list[tuple[dict[str, int], dict[str, Value]]]
+
+
+def _latches(box: Steps) -> tuple[Storage, ...]:
+    rests = [
+        _Rest(own, [(nodes, box.settle(own, own, nodes)) for nodes in patterns(box.nodes)])
+        for own in patterns(box.inputs)
+    ]
+    found = [_latch(box, node, rests) for node in box.nodes]
+    kept = tuple(storage for storage in found if storage is not None)
+    return kept if len(kept) == len(box.nodes) else ()
+
+
+def _latch(box: Steps, node: str, rests: list[_Rest]) -> Storage | None:
+    """Return the latch that a node is, over inputs alone or as a follower of another node."""
+    names = [*box.inputs, node]
+    ones = care = 0
+    for pattern, rest in enumerate(rests):
+        for state in (0, 1):
+            values = {after[node] for before, after in rest.outcomes if before[node] == state}
+            if values == {None}:
+                continue
+            if len(values) != 1:
+                return _follower(box, node, rests)
+            place = pattern | state << len(box.inputs)
+            care |= 1 << place
+            ones |= (values.pop() or 0) << place
+    return latch_of(from_table(ones, names, care), node, f"!{node}", box.inputs)
+
+
+def _follower(box: Steps, node: str, rests: list[_Rest]) -> Storage | None:
+    """Return the latch that takes the state of another node (or its inverse) while it is open."""
+    driven: list[tuple[int, _Rest]] = []
+    kept = 0
+    for pattern, rest in enumerate(rests):
+        if all(after[node] is None for _, after in rest.outcomes):
+            continue
+        if all(before[node] == after[node] for before, after in rest.outcomes):
+            kept |= 1 << pattern
+        else:
+            driven.append((pattern, rest))
+    opened = sum(1 << pattern for pattern, _ in driven)
+    enable = pruned(from_table(opened, box.inputs, opened | kept))
+    for other in box.nodes:
+        for inverted in (0, 1):
+            if other != node and _follows(node, other, inverted, [rest for _, rest in driven]):
+                data: Expression = Not(Var(other)) if inverted else Var(other)
+                return Storage(StorageKind.LATCH, node, f"!{node}", 1, data, enable)
+    return None
+
+
+def _follows(node: str, other: str, inverted: int, rests: list[_Rest]) -> bool:
+    return all(
+        after[other] is not None and after[node] == (after[other] or 0) ^ inverted
+        for rest in rests
+        for _, after in rest.outcomes
+    )
+
+
+def _flip_flop(box: Steps, clock: str) -> Storage | None:
+    """Return the flip-flop that a box with one node and one edge is."""
+    [node] = box.nodes
+    forced: dict[int, int] = {0: 0, 1: 0}
+    for pattern, own in enumerate(patterns(box.inputs)):
+        values = {box.settle(own, own, {node: value})[node] for value in (0, 1)}
+        if values in ({0}, {1}):
+            forced[values.pop() or 0] |= 1 << pattern
+    for rising in (True, False):
+        data = _edge_data(box, clock, rising=rising)
+        if data is None or not _keeps(box, clock, forced[0] | forced[1], rising=not rising):
+            continue
+        edge: Expression = Var(clock) if rising else Not(Var(clock))
+        clear, preset = (_or_none(from_table(forced[v], box.inputs)) for v in (0, 1))
+        kind = StorageKind.FLIP_FLOP
+        return Storage(kind, node, f"!{node}", 1, data, edge, clear=clear, preset=preset)
+    return None
+
+
+def _or_none(expression: Expression) -> Expression | None:
+    found = pruned(expression)
+    return None if found == Const(False) else found
+
+
+def _edge_data(box: Steps, clock: str, *, rising: bool) -> Expression | None:
+    """Return the next state at an edge as a function of inputs and state, or None."""
+    [node] = box.nodes
+    names = [*(name for name in box.inputs if name != clock), node]
+    ones = care = 0
+    for pattern, own in enumerate(patterns(names)):
+        state = own.pop(node)
+        before, after = {**own, clock: int(not rising)}, {**own, clock: int(rising)}
+        if box.settle(after, after, {node: state})[node] != state:
+            continue  # set or reset holds it
+        value = box.settle(before, after, {node: state})[node]
+        if value is not None:
+            care |= 1 << pattern
+            ones |= value << pattern
+    found = pruned(from_table(ones, names, care))
+    return None if found == Var(node) else found
+
+
+def _keeps(box: Steps, clock: str, forced: int, *, rising: bool) -> bool:
+    """Return whether an edge leaves the state alone wherever nothing forces it."""
+    [node] = box.nodes
+    for pattern, after in enumerate(patterns(box.inputs)):
+        if after[clock] != int(rising) or forced >> pattern & 1:
+            continue
+        before = {**after, clock: int(not rising)}
+        if any(box.settle(before, after, {node: v})[node] not in (v, None) for v in (0, 1)):
+            return False
+    return True
