@@ -121,7 +121,7 @@ def _connector(design: Design, wishes: Wishes) -> tuple[str, str, str] | None:
     if wishes.connect == "assign":
         return None
     buffer = next(iter(find_buffers(design.library)), None)
-    return None if buffer is None else (buffer.cell.name, buffer.input, buffer.output)
+    return None if buffer is None else (buffer.cell, buffer.inputs[0], buffer.output)
 
 
 def _is_connected(

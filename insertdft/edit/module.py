@@ -3,28 +3,30 @@
 from collections.abc import Iterator, Mapping
 
 from insertdft.chains.plan import Element, ModulePlan, Plan, Segment
-from insertdft.edit.instance import InstanceEdit, instance_splices
+from insertdft.edit.instance import InstanceEdit, statement_mates, statement_splices
 from insertdft.edit.wires import Wires
+from insertdft.library.cell import Library
 from insertdft.netlist import OPEN, Module, Netlist
 from insertdft.netlist.names import to_verilog
 from insertdft.styles.conversion import DATA, MISSION, SCAN, Conversion
 from insertdft.text import Splice
 
 
-def module_splices(netlist: Netlist, plan: Plan, module: Module) -> list[Splice]:
+def module_splices(netlist: Netlist, library: Library, plan: Plan, module: Module) -> list[Splice]:
     """Return the splices that ``plan`` asks for in one module."""
-    return _Editor(netlist, plan, module).splices()
+    return _Editor(netlist, library, plan, module).splices()
 
 
 class _Editor:
     """One module being edited: what each instance gains, what is declared, what is added."""
 
-    def __init__(self, netlist: Netlist, plan: Plan, module: Module) -> None:
+    def __init__(self, netlist: Netlist, library: Library, plan: Plan, module: Module) -> None:
         self._netlist = netlist
+        self._library = library
         self._plan = plan
         self._module = module
         self._mine: ModulePlan = plan.modules[module.name]
-        self._wires = Wires(module, [*self._port_names()])
+        self._wires = Wires(module, port_names(plan, self._mine))
         self._edits: dict[int, InstanceEdit] = {}
         self._number = _numbers(module, self._mine)
         self._items: list[str] = []
@@ -33,25 +35,27 @@ class _Editor:
         for segment in self._mine.segments:
             self._lay(segment)
         self._pass_test_nets()
-        found = self._header()
-        for number in sorted(self._edits):
-            found += instance_splices(self._netlist, self._module, number, self._edits)
+        found = [*self._header(), *self._statements()]
         if self._items:
             text = "".join(f"  {item}\n" for item in self._items)
             found.append(Splice(self._line_start(), self._line_start(), text, "scan-out ports"))
         return found
+
+    def _statements(self) -> Iterator[Splice]:
+        """Yield the splices of every statement that holds an edited instance."""
+        done = -1
+        for number in sorted(self._edits):
+            if number > done:
+                mates = statement_mates(self._module, number)
+                done = mates[-1]
+                cell = self._netlist.cell_names[int(self._module.instance_cell[number])]
+                yield from statement_splices(self._module, mates, self._edits, cell)
 
     def _line_start(self) -> int:
         """Return where the line of ``endmodule`` begins, if nothing but blanks stands before it."""
         text, end = self._module.source.text, self._module.body_end
         start = text.rfind("\n", 0, end) + 1
         return start if not text[start:end].strip() else end
-
-    def _port_names(self) -> Iterator[str]:
-        yield from (self._plan.port_names[net] for net in self._mine.test_nets)
-        for segment in self._mine.segments:
-            yield segment.scan_in
-            yield segment.scan_out
 
     def _lay(self, segment: Segment) -> None:
         upstream = segment.scan_in
@@ -77,8 +81,8 @@ class _Editor:
         inner = self._plan.modules[self._cell(element.instance)].segments[element.number]
         edit = self._edit(element.instance)
         downstream = goal or self._wires.fresh(f"scan_link_{self._wires.count + 1}")
-        edit.added[inner.scan_in] = upstream
-        edit.added[inner.scan_out] = downstream
+        edit.pins[inner.scan_in] = upstream
+        edit.pins[inner.scan_out] = downstream
         return downstream
 
     def _convert(self, element: Element, upstream: str, goal: str | None) -> str:
@@ -86,15 +90,15 @@ class _Editor:
         edit = self._edit(element.instance)
         edit.cell = conversion.after
         edit.renamed = conversion.pins
-        edit.why = f"`{element.instance}` joins a chain"
+        edit.positions = self._library.cells[conversion.before].pin_order or ()
         if conversion.parts:
             self._compose(element.instance, conversion, upstream, edit)
         else:
-            edit.set(conversion.scan_in, upstream)
+            edit.pins[conversion.scan_in] = upstream
         for pin, net in conversion.test_pins.items():
-            edit.set(pin, self._plan.port_names[net])
+            edit.pins[pin] = self._plan.port_names[net]
         for pin, value in conversion.ties.items():
-            edit.set(pin, f"1'b{value}")
+            edit.pins[pin] = f"1'b{value}"
         return self._tap(element.instance, conversion, edit, goal)
 
     def _tap(self, name: str, conversion: Conversion, edit: InstanceEdit, goal: str | None) -> str:
@@ -105,7 +109,7 @@ class _Editor:
         if net is not None:
             return net
         fresh = goal or self._wires.fresh_beside(name, "scan_q")
-        edit.set(tap, fresh)
+        edit.pins[tap] = fresh
         return fresh
 
     def _compose(
@@ -118,7 +122,7 @@ class _Editor:
             DATA: self._wires.fresh_beside(name, "scan_d"),
         }
         nets |= {net.value: port for net, port in self._plan.port_names.items()}
-        edit.set(conversion.scan_in, nets[DATA])
+        edit.pins[conversion.scan_in] = nets[DATA]
         for part in conversion.parts:
             for net in part.pins.values():
                 if net not in nets:
@@ -132,13 +136,14 @@ class _Editor:
         for name in sorted(inner, key=self._number.__getitem__):
             cell = self._cell(name)
             if cell in self._netlist.modules:
-                for net in self._plan.modules[cell].test_nets:
-                    port = self._plan.port_names[net]
-                    self._edit(name).added[port] = port
+                edit = self._edit(name)
+                ports = [self._plan.port_names[net] for net in self._plan.modules[cell].test_nets]
+                edit.pins |= {port: port for port in ports}
+                old = [port.name for port in self._netlist.modules[cell].ports]
+                edit.order = [*old, *port_names(self._plan, self._plan.modules[cell])]
 
     def _edit(self, name: str) -> InstanceEdit:
-        number = self._number[name]
-        return self._edits.setdefault(number, InstanceEdit(f"`{name}` passes a chain on"))
+        return self._edits.setdefault(self._number[name], InstanceEdit())
 
     def _cell(self, name: str) -> str:
         return self._netlist.cell_names[int(self._module.instance_cell[self._number[name]])]
@@ -147,9 +152,13 @@ class _Editor:
         """Return the text of the net at a pin of an instance, None if there is none."""
         number = self._number[name]
         module, names = self._module, self._netlist.pin_names
+        order = self._library.cells[self._cell(name)].pin_order or ()
         for row in range(int(module.pin_start[number]), int(module.pin_start[number + 1])):
             net = int(module.pin_net[row])
-            if names[int(module.pin_name[row])] == pin and net != OPEN:
+            here = names[int(module.pin_name[row])]
+            if here[0] == "#":
+                here = order[int(here[1:])]
+            if here == pin and net != OPEN:
                 return to_verilog(module.net_name(net))
         return None
 
@@ -175,7 +184,17 @@ class _Editor:
 
     def _directions(self) -> Mapping[str, str]:
         outputs = {segment.scan_out for segment in self._mine.segments}
-        return {at: "output" if at in outputs else "input" for at in self._port_names()}
+        return {
+            at: "output" if at in outputs else "input" for at in port_names(self._plan, self._mine)
+        }
+
+
+def port_names(plan: Plan, module: ModulePlan) -> list[str]:
+    """Return the ports that a module gains, in the order they are added."""
+    names = [plan.port_names[net] for net in module.test_nets]
+    for segment in module.segments:
+        names += [segment.scan_in, segment.scan_out]
+    return names
 
 
 def _numbers(module: Module, plan: ModulePlan) -> dict[str, int]:

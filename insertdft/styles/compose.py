@@ -35,11 +35,11 @@ def _by_mux(library: Library) -> Iterator[tuple[Part, ...]]:
     for mux in find_muxes(library):
         ins = {mux.select: ENABLE, mux.when0: MISSION, mux.when1: SCAN}
         if not mux.inverted:
-            yield (Part("mux", mux.cell.name, {**ins, mux.output: DATA}),)
+            yield (Part("mux", mux.cell, {**ins, mux.output: DATA}),)
         elif inverter is not None:
             yield (
-                Part("mux", mux.cell.name, {**ins, mux.output: "turned"}),
-                Part("inv", inverter.cell.name, {inverter.input: "turned", inverter.output: DATA}),
+                Part("mux", mux.cell, {**ins, mux.output: "turned"}),
+                Part("inv", inverter.cell, {inverter.inputs[0]: "turned", inverter.output: DATA}),
             )
 
 
@@ -49,9 +49,9 @@ def _by_nand(library: Library) -> Iterator[tuple[Part, ...]]:
     if inverter is None or nand is None:
         return
     first, second = nand.inputs
-    name, output = nand.cell.name, nand.output
+    name, output = nand.cell, nand.output
     yield (
-        Part("inv", inverter.cell.name, {inverter.input: ENABLE, inverter.output: "mission_on"}),
+        Part("inv", inverter.cell, {inverter.inputs[0]: ENABLE, inverter.output: "mission_on"}),
         Part("nand_d", name, {first: MISSION, second: "mission_on", output: "from_mission"}),
         Part("nand_s", name, {first: SCAN, second: ENABLE, output: "from_scan"}),
         Part("nand_y", name, {first: "from_mission", second: "from_scan", output: DATA}),

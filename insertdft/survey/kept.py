@@ -1,6 +1,5 @@
 """Cells that the netlist, the library or the user wants left alone."""
 
-import re
 from collections import defaultdict
 from collections.abc import Iterable
 from fnmatch import fnmatchcase
@@ -10,14 +9,12 @@ from typing import Final
 from insertdft.diagnostics import DesignError, Diagnostic, Severity, nearest
 from insertdft.netlist import Ids
 from insertdft.netlist.names import plain, split_path
+from insertdft.source import attributes
 from insertdft.survey.verdict import Verdict
 
-#: Attributes of IEEE 1364-2005, 3.8, that by common practice ask tools to leave an instance alone.
-ATTRIBUTE: Final = re.compile(
-    r"\(\*[^\"]*?\b(keep|dont_touch|DONT_TOUCH|keep_instance)\b\s*(?:=\s*(\"[^\"]*\"|[\w']+))?",
-    re.ASCII,
-)
-OFF: Final = frozenset({"0", '"0"', '"false"', "false", "1'b0", "1'h0", '"no"', '""'})
+#: Attributes (IEEE 1364-2005, 3.8) that by common practice ask tools to leave an instance alone.
+MARKS: Final = ("keep", "dont_touch", "DONT_TOUCH", "keep_instance")
+OFF: Final = frozenset({"0", "false", "no", "1'b0", "1'h0", ""})
 
 
 def find_kept(verdict: Verdict, storage: Ids, patterns: tuple[str, ...]) -> None:
@@ -38,16 +35,8 @@ def find_kept(verdict: Verdict, storage: Ids, patterns: tuple[str, ...]) -> None
 
 
 def _attribute(verdict: Verdict, cell: int) -> str | None:
-    module = verdict.design.module_of(cell)
-    local = int(verdict.design.local[cell])
-    start, end = int(module.instance_before[local]), int(module.instance_start[local])
-    before = module.source.text[start:end]
-    if "(*" not in before:
-        return None
-    for match in ATTRIBUTE.finditer(before):
-        if match[2] not in OFF:
-            return match[1]
-    return None
+    found = attributes(verdict.design.module_of(cell), int(verdict.design.local[cell]))
+    return next((mark for mark in MARKS if found.get(mark, "0").lower() not in OFF), None)
 
 
 def _leave_out_by_pattern(verdict: Verdict, storage: Ids, patterns: tuple[str, ...]) -> None:
