@@ -1,7 +1,7 @@
 """Arrange convertible cells into chains, hierarchy and balance considered together."""
 
 from collections import defaultdict
-from collections.abc import Sequence
+from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, field
 from typing import Final
 
@@ -25,11 +25,13 @@ class Cells:
         leaves: Shape (c,), ascending.
         group: Shape (leaves of the design,), clock group of each convertible leaf, else -1.
         bits: Shape (leaves of the design,), shift cycles of each convertible leaf, else 0.
+        followers: Leaves that come with a convertible leaf; they are not in ``leaves``.
     """
 
     leaves: Ids = field(repr=False)
     group: Ids = field(repr=False)
     bits: Ids = field(repr=False)
+    followers: Mapping[int, tuple[int, ...]] = field(default_factory=dict, repr=False)
 
 
 @dataclass(frozen=True, slots=True, eq=False)
@@ -143,7 +145,8 @@ def _items(
     for occurrence, leaf in layout.items(base, cells.leaves):
         if leaf >= 0:
             groups = tuple(int(cells.group[leaf + shift]) for shift in shifts)
-            found.append((Item(occurrence, leaf, int(cells.bits[leaf]), -1), groups))
+            behind = cells.followers.get(leaf, ())
+            found.append((Item(occurrence, leaf, int(cells.bits[leaf]), -1, behind), groups))
         else:
             found += _inner_items(layout, fixed, places, occurrence)
     return found

@@ -6,15 +6,24 @@ from hashlib import sha256
 import numpy as np
 
 from insertdft.chains.arrange import Arrangement
-from insertdft.chains.choose import Chosen
+from insertdft.chains.choose import Chosen, Group
 from insertdft.chains.names import PortNamer
-from insertdft.chains.plan import ChainPlan, Element, LeftAlone, ModulePlan, Plan, Segment
+from insertdft.chains.plan import (
+    CELL,
+    SEGMENT,
+    ChainPlan,
+    Element,
+    LeftAlone,
+    ModulePlan,
+    Plan,
+    Segment,
+)
 from insertdft.chains.wishes import Wishes
 from insertdft.description import TestPort
 from insertdft.design.flat import Design
 from insertdft.library import find_buffers
 from insertdft.netlist import OPEN, Instance, Module
-from insertdft.styles import Conversion, TestNet
+from insertdft.styles import Conversion, TestNet, in_port_order, kind_of
 from insertdft.styles.mux_d import sequences
 from insertdft.survey import Survey
 
@@ -31,8 +40,7 @@ def assemble(
     touched = [design.netlist.modules[name] for name in design.netlist.modules if name in segments]
     namer = PortNamer(touched, wishes.ports)
     needs = _test_nets(design, chosen.conversions, segments)
-    used = [net for net in TestNet if any(net in nets for nets in needs.values())]
-    port_names = {net: namer.one(net.value) for net in used}
+    port_names = _name_test_nets(namer, in_port_order(set().union(*needs.values())))
     most = max(map(len, segments.values()))
     ins, outs = namer.numbered("scan_in", most), namer.numbered("scan_out", most)
     modules = {
@@ -46,18 +54,17 @@ def assemble(
                 )
                 for number, elements in enumerate(segments[module.name])
             ),
-            tuple(net for net in TestNet if net in needs[module.name]),
+            in_port_order(needs[module.name]),
         )
         for module in touched
     }
     chains = tuple(
-        ChainPlan(f"chain_{number + 1}", domain.port, domain.edge)
+        _chain(f"chain_{number + 1}", chosen.groups[group], port_names)
         for number, (group, _) in enumerate(arrangement.chains)
-        for domain in [survey.domains[chosen.groups[group]]]
     )
     connector = _connector(design, wishes)
     held = {item.port: item.value for item in (*survey.held, *survey.set_resets)}
-    clocks = list(dict.fromkeys(chain.clock for chain in chains))
+    clocks = list(dict.fromkeys(clock for chain in chains for clock in chain.clocks))
     enable = port_names[TestNet.SCAN_ENABLE]
     added, without = _added_area(survey, chosen, modules, connector)
     return Plan(
@@ -84,18 +91,35 @@ def fingerprint(text: str) -> str:
     return sha256(text.encode("latin-1")).hexdigest()
 
 
+def _name_test_nets(namer: PortNamer, nets: tuple[str, ...]) -> dict[str, str]:
+    """Return the port of each test net; of several of one kind each gets a number."""
+    found: dict[str, str] = {}
+    for kind in dict.fromkeys(map(kind_of, nets)):
+        mine = [net for net in nets if kind_of(net) == kind]
+        names = [namer.one(kind)] if len(mine) == 1 else namer.numbered(kind, len(mine))
+        found |= dict(zip(mine, names, strict=True))
+    return found
+
+
+def _chain(name: str, group: Group, port_names: Mapping[str, str]) -> ChainPlan:
+    if group.domain is None:
+        clocks = (port_names[TestNet.CLOCK_A], port_names[TestNet.CLOCK_B])
+        return ChainPlan(name, group.style, clocks, None)
+    return ChainPlan(name, group.style, (group.domain.port,), group.domain.edge)
+
+
 def _test_nets(
     design: Design,
     conversions: Sequence[Conversion],
     segments: dict[str, list[tuple[Element, ...]]],
-) -> dict[str, set[TestNet]]:
+) -> dict[str, set[str]]:
     """Return the test nets of each module, those of its inner modules included."""
-    found: dict[str, set[TestNet]] = {}
+    found: dict[str, set[str]] = {}
 
-    def need(module: str) -> set[TestNet]:
+    def need(module: str) -> set[str]:
         if module not in found:
-            nets: set[TestNet] = set()
-            for conversion in {at.number for at in flat(module) if not at.is_segment}:
+            nets: set[str] = set()
+            for conversion in {at.number for at in flat(module) if at.kind == CELL}:
                 nets |= set(conversions[conversion].test_nets())
             for inner in inner_modules(module):
                 nets |= need(inner)
@@ -106,7 +130,7 @@ def _test_nets(
         return (element for elements in segments[module] for element in elements)
 
     def inner_modules(module: str) -> list[str]:
-        names = {at.instance for at in flat(module) if at.is_segment}
+        names = {at.instance for at in flat(module) if at.kind == SEGMENT}
         home = design.netlist.modules[module]
         cells = design.netlist.cell_names
         pairs = zip(home.instance_names, home.instance_cell.tolist(), strict=True)
@@ -128,7 +152,7 @@ def _is_connected(
     design: Design, module: Module, conversions: Sequence[Conversion], last: Element
 ) -> bool:
     """Return whether the output that leaves a segment drives a net already."""
-    if last.is_segment:
+    if last.kind == SEGMENT:
         return False
     conversion = conversions[last.number]
     tap = conversion.taps[0].pin
@@ -167,7 +191,7 @@ def _added_area(
 def _ports(
     survey: Survey, chains: Sequence[ChainPlan], top: ModulePlan, enable: str
 ) -> tuple[TestPort, ...]:
-    clocks = dict.fromkeys(chain.clock for chain in chains)
+    clocks = dict.fromkeys(clock for chain in chains for clock in chain.clocks)
     resets = {item.port: item.value for item in survey.set_resets}
     modes = {item.port: item.value for item in survey.held}
     return (

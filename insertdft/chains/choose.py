@@ -3,6 +3,7 @@
 from collections import defaultdict
 from collections.abc import Iterable, Sequence
 from dataclasses import dataclass, field
+from typing import NamedTuple
 
 import numpy as np
 
@@ -13,8 +14,25 @@ from insertdft.design.flat import Design
 from insertdft.diagnostics import DesignError, Diagnostic, Severity
 from insertdft.netlist import Ids
 from insertdft.styles import Chooser, Conversion, Refusal
-from insertdft.survey import LEFT_ALONE, Survey
+from insertdft.survey import LEFT_ALONE, Domain, Survey
 from insertdft.survey.kept import matches, unmatched
+
+
+class Group(NamedTuple):
+    """Cells that may share a chain.
+
+    Attributes:
+        style: Scan style of them all.
+        domain: Clock port and edge; for LSSD, whose chains are shifted by A and B alone, None.
+    """
+
+    style: str
+    domain: Domain | None
+
+    @property
+    def label(self) -> str:
+        """A few words for messages."""
+        return f"{self.style} {self.domain.label}" if self.domain else self.style
 
 
 @dataclass(frozen=True, slots=True, eq=False)
@@ -23,7 +41,7 @@ class Chosen:
 
     Attributes:
         cells: What goes into chains, by group.
-        groups: Survey domain of each group.
+        groups: By number.
         conversion: Shape (leaves,), index of the conversion of each leaf, -1 for none.
         conversions: What the indices mean.
         reasons: Leaf -> slug of what keeps it out.
@@ -31,7 +49,7 @@ class Chosen:
     """
 
     cells: Cells
-    groups: list[int]
+    groups: tuple[Group, ...]
     conversion: Ids
     conversions: list[Conversion]
     reasons: dict[int, str]
@@ -56,13 +74,8 @@ def choose_cells(survey: Survey, wishes: Wishes, layout: Hierarchy) -> Chosen:
         else:
             conversion[leaf] = found
     _agree(layout, conversion, refused)
-    group = np.full(len(design.cell), -1, np.int32)
-    group[survey.storage] = survey.domain
-    group[conversion < 0] = -1
     leaves = np.flatnonzero(conversion >= 0).astype(np.int32)
-    groups = sorted(set(group[leaves].tolist()))
-    renumber = {domain: number for number, domain in enumerate(groups)}
-    group[leaves] = [renumber[domain] for domain in group[leaves].tolist()]
+    groups, group = _group(survey, chooser.conversions, conversion, leaves)
     bits = np.zeros(len(design.cell), np.int32)
     bits[leaves] = [chooser.conversions[at].bits for at in conversion[leaves].tolist()]
     reasons = dict(survey.reasons)
@@ -70,6 +83,24 @@ def choose_cells(survey: Survey, wishes: Wishes, layout: Hierarchy) -> Chosen:
     findings = [_refusal(design, refusal, those) for refusal, those in refused.items()]
     cells = Cells(leaves, group, bits)
     return Chosen(cells, groups, conversion, chooser.conversions, reasons, findings)
+
+
+def _group(
+    survey: Survey, conversions: Sequence[Conversion], conversion: Ids, leaves: Ids
+) -> tuple[tuple[Group, ...], Ids]:
+    """Return the groups in order of style and domain, and the group of each leaf of the design."""
+    domain = np.full(len(survey.design.cell), -1, np.int32)
+    domain[survey.storage] = survey.domain
+    keys = list(zip(domain[leaves].tolist(), conversion[leaves].tolist(), strict=True))
+    found: dict[tuple[int, int], Group] = {}
+    for at, number in sorted(set(keys)):
+        style = conversions[number].style
+        found[at, number] = Group(style, None if style == "lssd" else survey.domains[at])
+    groups = tuple(dict.fromkeys(found.values()))
+    number_of = {key: groups.index(group) for key, group in found.items()}
+    group = np.full(len(survey.design.cell), -1, np.int32)
+    group[leaves] = [number_of[key] for key in keys]
+    return groups, group
 
 
 def _included(

@@ -1,9 +1,10 @@
 """From a plan to the chain description that pattern tools and the proof are told."""
 
 from collections.abc import Iterator, Mapping
+from dataclasses import replace
 from typing import NamedTuple
 
-from insertdft.chains.plan import ModulePlan, Plan
+from insertdft.chains.plan import SEGMENT, ModulePlan, Plan
 from insertdft.description import Chain, ChainCell, Description
 from insertdft.netlist import Netlist
 from insertdft.netlist.names import join_path
@@ -19,19 +20,20 @@ def describe(plan: Plan, netlist: Netlist) -> Description:
     """Return the description of the netlist that ``plan`` makes of ``netlist``."""
     cell_of = _child_modules(plan, netlist)
     top = plan.modules[plan.design]
+    enable = plan.port_names.get(TestNet.SCAN_ENABLE)
     chains = []
     for number, (chain, segment) in enumerate(zip(plan.chains, top.segments, strict=True)):
         cells, inverted_out = _cells(_walk(plan, cell_of, plan.design, number, ()))
         chains.append(
             Chain(
                 name=chain.name,
-                style=plan.style,
+                style=chain.style,
                 scan_in=segment.scan_in,
                 scan_out=segment.scan_out,
                 cells=cells,
-                clocks=(chain.clock,),
+                clocks=chain.clocks,
                 edge=chain.edge,
-                scan_enable=plan.port_names.get(TestNet.SCAN_ENABLE),
+                scan_enable=enable if chain.style == "mux-d" else None,
                 inverted_out=inverted_out,
             )
         )
@@ -54,7 +56,7 @@ def _inner_instances(module_plan: ModulePlan) -> set[str]:
         element.instance
         for segment in module_plan.segments
         for element in segment.elements
-        if element.is_segment
+        if element.kind == SEGMENT
     }
 
 
@@ -67,7 +69,7 @@ def _walk(
 ) -> Iterator[_Placed]:
     for element in plan.modules[module].segments[segment].elements:
         here = (*path, element.instance)
-        if element.is_segment:
+        if element.kind == SEGMENT:
             inner = cell_of[module][element.instance]
             yield from _walk(plan, cell_of, inner, element.number, here)
         else:
@@ -80,13 +82,20 @@ def _cells(placed: Iterator[_Placed]) -> tuple[tuple[ChainCell, ...], bool]:
     turned = False
     for path, conversion in placed:
         tap = conversion.taps[0]
+        turned ^= conversion.scan_in_inverted
+        if conversion.bits == 0:
+            # The second latch of a position: the position leaves by its output.
+            slave = join_path(path)
+            cells[-1] = replace(cells[-1], slave=slave, scan_out=tap.pin)
+            turned ^= tap.inverted
+            continue
         cells.append(
             ChainCell(
                 instance=join_path(path),
                 cell=conversion.after,
                 scan_in=conversion.scan_in,
                 scan_out=tap.pin,
-                inverted=turned ^ conversion.scan_in_inverted,
+                inverted=turned,
                 bits=conversion.bits,
             )
         )

@@ -32,7 +32,7 @@ def make_plan(survey: Survey, wishes: Wishes) -> tuple[Plan, tuple[Diagnostic, .
     chosen = choose_cells(survey, wishes, layout)
     if len(chosen.cells.leaves) == 0:
         raise DesignError([_nothing_left(design), *survey.findings, *chosen.findings])
-    counts = _counts(survey, chosen, wishes)
+    counts = _counts(chosen, wishes)
     arrangement = arrange(chosen.cells, layout, counts)
     segments = lay_segments(design, layout, arrangement, chosen.conversion)
     plan = assemble(survey, wishes, chosen, arrangement, segments)
@@ -48,12 +48,12 @@ def _check(wishes: Wishes) -> None:
         raise ValueError(f"connect must be buffer or assign, got {wishes.connect!r}")
 
 
-def _counts(survey: Survey, chosen: Chosen, wishes: Wishes) -> list[int]:
+def _counts(chosen: Chosen, wishes: Wishes) -> list[int]:
     """Return the number of chains of each group."""
     cells = chosen.cells
     weights = cells.bits[cells.leaves]
     sizes = np.bincount(cells.group[cells.leaves], weights).astype(int).tolist()
-    labels = [survey.domains[domain].label for domain in chosen.groups]
+    labels = [group.label for group in chosen.groups]
     if wishes.chains is not None:
         if wishes.chains < len(sizes):
             raise DesignError([_too_few(labels, sizes, wishes.chains)])

@@ -8,10 +8,10 @@ The segments of the top module are the chains.
 
 from collections.abc import Mapping
 from dataclasses import dataclass, field
-from typing import NamedTuple
+from typing import Final, NamedTuple
 
 from insertdft.description import Cycle, TestPort
-from insertdft.styles.conversion import Conversion, TestNet
+from insertdft.styles.conversion import Conversion, Part
 
 
 class Element(NamedTuple):
@@ -19,13 +19,18 @@ class Element(NamedTuple):
 
     Attributes:
         instance: Instance name inside the module.
-        number: Index into ``Plan.conversions``, or into the segments of the instanced module.
-        is_segment: Which of the two.
+        number: CELL: index into ``Plan.conversions``; SEGMENT: index into the segments of the
+            instanced module.
+        kind: CELL or SEGMENT.
     """
 
     instance: str
     number: int
-    is_segment: bool
+    kind: str
+
+
+CELL: Final = "cell"
+SEGMENT: Final = "segment"
 
 
 @dataclass(frozen=True, slots=True)
@@ -47,6 +52,26 @@ class Segment:
 
 
 @dataclass(frozen=True, slots=True)
+class Mend:
+    """Cells put into the way of a pin, to make it controllable in test.
+
+    At an input pin, MISSION of the parts is what drove it and DATA is what drives it afterwards.
+    At an output pin, MISSION is what it drives and DATA is the net that it drove.
+
+    Attributes:
+        instance: Instance name inside the module.
+        pin: Its pin.
+        parts: What is added.
+        why: Slug of the finding that it mends.
+    """
+
+    instance: str
+    pin: str
+    parts: tuple[Part, ...]
+    why: str
+
+
+@dataclass(frozen=True, slots=True)
 class ModulePlan:
     """What is done to one module.
 
@@ -54,10 +79,12 @@ class ModulePlan:
         segments: In port order.
         test_nets: Test nets that the module needs, each entering by a port of the name that
             ``Plan.port_names`` gives.
+        mends: Cells added to make clocks, resets and enables controllable.
     """
 
     segments: tuple[Segment, ...]
-    test_nets: tuple[TestNet, ...]
+    test_nets: tuple[str, ...]
+    mends: tuple[Mend, ...] = ()
 
 
 @dataclass(frozen=True, slots=True)
@@ -66,13 +93,15 @@ class ChainPlan:
 
     Attributes:
         name: Its name in the description.
-        clock: Port that clocks it.
-        edge: ``rise`` or ``fall``.
+        style: ``mux-d``, ``clocked-scan`` or ``lssd``.
+        clocks: Ports that shift it.
+        edge: ``rise`` or ``fall``; None for LSSD.
     """
 
     name: str
-    clock: str
-    edge: str
+    style: str
+    clocks: tuple[str, ...]
+    edge: str | None
 
 
 @dataclass(frozen=True, slots=True)
@@ -119,7 +148,7 @@ class Plan:
     conversions: tuple[Conversion, ...]
     modules: Mapping[str, ModulePlan] = field(repr=False)
     chains: tuple[ChainPlan, ...]
-    port_names: Mapping[TestNet, str]
+    port_names: Mapping[str, str]
     connector: tuple[str, str, str] | None
     ports: tuple[TestPort, ...]
     sequences: Mapping[str, tuple[Cycle, ...]]

@@ -12,7 +12,7 @@ FORMAT: Final = "insertdft-plan"
 VERSION: Final = 1
 
 #: An element of a segment, one line each so that plans can be compared and edited by hand.
-ELEMENT: Final = re.compile(r'\[\s+("(?:[^"\\]|\\.)*"),\s+(\d+),\s+(true|false)\s+\]')
+ELEMENT: Final = re.compile(r'\[\s+("(?:[^"\\]|\\.)*"),\s+(\d+),\s+("[a-z-]+")\s+\]')
 
 
 class _Head(msgspec.Struct):

@@ -25,12 +25,14 @@ class Item(NamedTuple):
         number: Flat leaf instance, or index of the inner region's segment.
         length: Shift cycles.
         inner: Occurrence of the inner region, -1 for a cell.
+        followers: Flat leaves that come with the cell, in order (the slave of a latch pair).
     """
 
     occurrence: int
     number: int
     length: int
     inner: int
+    followers: tuple[int, ...] = ()
 
 
 @dataclass(frozen=True, slots=True)

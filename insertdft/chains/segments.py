@@ -1,12 +1,12 @@
 """From arranged items to the segments of every module they pass through."""
 
 from collections import defaultdict
-from collections.abc import Sequence
+from collections.abc import Iterator, Sequence
 from itertools import groupby
 from typing import NamedTuple
 
 from insertdft.chains.arrange import Arrangement
-from insertdft.chains.plan import Element
+from insertdft.chains.plan import CELL, SEGMENT, Element
 from insertdft.chains.regions import Hierarchy, Item
 from insertdft.design.flat import Design
 from insertdft.netlist import Ids
@@ -56,9 +56,9 @@ class _Builder:
         for child, run in groupby(steps, key=lambda step: step.child):
             here = [step.item for step in run]
             if child < 0:
-                elements += [self._element(item) for item in here]
+                elements += [element for item in here for element in self._elements(item)]
             else:
-                elements.append(Element(self._name(child), self.lay(child, here), True))
+                elements.append(Element(self._name(child), self.lay(child, here), SEGMENT))
         self.segments[module].append(tuple(elements))
         return len(self.segments[module]) - 1
 
@@ -68,12 +68,14 @@ class _Builder:
             found, goal = goal, self._layout.occurrences[goal].parent
         return found
 
-    def _element(self, item: Item) -> Element:
+    def _elements(self, item: Item) -> Iterator[Element]:
         if item.inner >= 0:
-            return Element(self._name(item.inner), item.number, True)
-        module = self._design.module_of(item.number)
-        name = module.instance_names[int(self._design.local[item.number])]
-        return Element(name, int(self._conversion[item.number]), False)
+            yield Element(self._name(item.inner), item.number, SEGMENT)
+            return
+        for leaf in (item.number, *item.followers):
+            module = self._design.module_of(leaf)
+            name = module.instance_names[int(self._design.local[leaf])]
+            yield Element(name, int(self._conversion[leaf]), CELL)
 
     def _name(self, occurrence: int) -> str:
         place = self._layout.occurrences[occurrence]

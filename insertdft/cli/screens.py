@@ -5,6 +5,7 @@ from collections.abc import Iterable, Mapping, Sequence
 from typing import Any, Final
 
 from insertdft.api import Conversion
+from insertdft.chains.plan import CELL
 from insertdft.description import Chain
 from insertdft.diagnostics import Diagnostic, to_json
 from insertdft.survey import LEFT_ALONE, Survey
@@ -55,7 +56,7 @@ def _converted(done: Conversion) -> list[dict[str, Any]]:
     for name, module in done.plan.modules.items():
         for segment in module.segments:
             for element in segment.elements:
-                if not element.is_segment:
+                if element.kind == CELL and done.plan.conversions[element.number].bits:
                     ways[element.number] += places[name]
     if sum(ways.values()) != len(counts):
         raise RuntimeError("the plan's cells and the described ones differ in number")
@@ -73,8 +74,8 @@ def _chain_data(chain: Chain) -> dict[str, Any]:
     return {
         "name": chain.name,
         "length": chain.length,
-        "clock": chain.clocks[0],
-        "edge": chain.edge,
+        "clock": " ".join(chain.clocks),
+        "edge": chain.edge or "-",
         "scan_in": chain.scan_in,
         "scan_out": chain.scan_out,
     }

@@ -2,13 +2,13 @@
 
 from collections.abc import Iterator, Mapping
 
-from insertdft.chains.plan import Element, ModulePlan, Plan, Segment
+from insertdft.chains.plan import SEGMENT, Element, Mend, ModulePlan, Plan, Segment
 from insertdft.edit.instance import InstanceEdit, statement_mates, statement_splices
 from insertdft.edit.wires import Wires
 from insertdft.library.cell import Library
 from insertdft.netlist import OPEN, Module, Netlist
 from insertdft.netlist.names import to_verilog
-from insertdft.styles.conversion import DATA, MISSION, SCAN, Conversion
+from insertdft.styles.conversion import DATA, MISSION, SCAN, Conversion, Part
 from insertdft.text import Splice
 
 
@@ -34,6 +34,8 @@ class _Editor:
     def splices(self) -> list[Splice]:
         for segment in self._mine.segments:
             self._lay(segment)
+        for mend in self._mine.mends:
+            self._mend(mend)
         self._pass_test_nets()
         found = [*self._header(), *self._statements()]
         if self._items:
@@ -63,7 +65,7 @@ class _Editor:
             is_last = place == len(segment.elements)
             # The last element drives the port itself where nothing stands between.
             goal = segment.scan_out if is_last and not segment.connected else None
-            if element.is_segment:
+            if element.kind == SEGMENT:
                 upstream = self._pass_through(element, upstream, goal)
             else:
                 upstream = self._convert(element, upstream, goal)
@@ -92,8 +94,12 @@ class _Editor:
         edit.renamed = conversion.pins
         edit.positions = self._library.cells[conversion.before].pin_order or ()
         if conversion.parts:
-            self._compose(element.instance, conversion, upstream, edit)
-        else:
+            mission = self._net_at(element.instance, conversion.scan_in)
+            data = self._wires.fresh_beside(element.instance, "scan_d")
+            edit.pins[conversion.scan_in] = data
+            nets = {MISSION: mission or "1'b0", SCAN: upstream, DATA: data}
+            self._add_parts(element.instance, "scan", conversion.parts, nets)
+        elif conversion.how != "kept":
             edit.pins[conversion.scan_in] = upstream
         for pin, net in conversion.test_pins.items():
             edit.pins[pin] = self._plan.port_names[net]
@@ -112,24 +118,39 @@ class _Editor:
         edit.pins[tap] = fresh
         return fresh
 
-    def _compose(
-        self, name: str, conversion: Conversion, upstream: str, edit: InstanceEdit
+    def _mend(self, mend: Mend) -> None:
+        edit = self._edit(mend.instance)
+        old = self._net_at(mend.instance, mend.pin) or "1'b0"
+        fresh = self._wires.fresh_beside(mend.instance, f"test_{mend.pin}")
+        drives = self._drives(mend)
+        nets = {MISSION: fresh, DATA: old} if drives else {MISSION: old, DATA: fresh}
+        edit.pins[mend.pin] = fresh
+        self._add_parts(mend.instance, "test", mend.parts, nets)
+
+    def _drives(self, mend: Mend) -> bool:
+        """Return whether a mend stands at an output of its instance."""
+        cell = self._cell(mend.instance)
+        if cell in self._netlist.modules:
+            ports = self._netlist.modules[cell].ports
+            return any(at.name == mend.pin and at.direction == "output" for at in ports)
+        return self._library.cells[cell].pins[mend.pin].direction == "output"
+
+    def _add_parts(
+        self, name: str, prefix: str, parts: tuple[Part, ...], nets: dict[str, str]
     ) -> None:
-        mission = self._net_at(name, conversion.scan_in)
-        nets = {
-            MISSION: "1'b0" if mission is None else mission,
-            SCAN: upstream,
-            DATA: self._wires.fresh_beside(name, "scan_d"),
-        }
-        nets |= {net.value: port for net, port in self._plan.port_names.items()}
-        edit.pins[conversion.scan_in] = nets[DATA]
-        for part in conversion.parts:
+        """Put parts beside an instance; nets between them are declared as they are met."""
+        nets |= self._plan.port_names
+        beside = self._edit(name).beside
+        for part in parts:
             for net in part.pins.values():
                 if net not in nets:
-                    nets[net] = self._wires.fresh_beside(name, f"scan_{net}")
+                    is_constant = net[0].isdigit()
+                    nets[net] = (
+                        net if is_constant else self._wires.fresh_beside(name, f"{prefix}_{net}")
+                    )
             pins = ", ".join(f".{pin}({nets[net]})" for pin, net in part.pins.items())
-            part_name = to_verilog(self._wires.fresh_part(name, f"scan_{part.role}"))
-            edit.beside.append(f"{part.cell} {part_name} ({pins});")
+            part_name = to_verilog(self._wires.fresh_part(name, f"{prefix}_{part.role}"))
+            beside.append(f"{part.cell} {part_name} ({pins});")
 
     def _pass_test_nets(self) -> None:
         inner = {at.instance for segment in self._mine.segments for at in segment.elements}

@@ -6,7 +6,7 @@ from insertdft.library import find_gates, find_inverters, find_muxes
 from insertdft.library.cell import Library
 from insertdft.styles.conversion import DATA, MISSION, SCAN, Part, TestNet
 
-ENABLE = TestNet.SCAN_ENABLE.value
+ENABLE = TestNet.SCAN_ENABLE
 
 
 def compose_mux(library: Library) -> tuple[Part, ...] | None:
