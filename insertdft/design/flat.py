@@ -13,7 +13,7 @@ from typing import Final, NamedTuple
 import numpy as np
 
 from insertdft.library.cell import Cell, Library
-from insertdft.netlist import Ids, Module, Netlist, Offsets
+from insertdft.netlist import OPEN, Ids, Module, Netlist, Offsets
 from insertdft.netlist.names import join_path
 from insertdft.text import Span
 
@@ -122,6 +122,15 @@ class Design:
 
     def path(self, occurrence: int) -> tuple[str, ...]:
         """Return the instance names from the top down to ``occurrence`` (empty for the top)."""
+        if occurrence not in self._paths:
+            self._paths[occurrence] = self._path(occurrence)
+        return self._paths[occurrence]
+
+    @cached_property
+    def _paths(self) -> dict[int, tuple[str, ...]]:
+        return {}
+
+    def _path(self, occurrence: int) -> tuple[str, ...]:
         parts: list[str] = []
         while (place := self.occurrences[occurrence]).parent >= 0:
             parent = self.occurrences[place.parent]
@@ -143,6 +152,33 @@ class Design:
                 self.pin_name[rows].tolist(), self.pin_net[rows].tolist(), strict=True
             )
         }
+
+    def net_at(self, instance: int, pin: str) -> int:
+        """Return the flat net at one pin, OPEN if it is unconnected or not there."""
+        number = self._pin_numbers.get(pin, -1)
+        first, end = int(self.pin_start[instance]), int(self.pin_start[instance + 1])
+        names: list[int] = self.pin_name[first:end].tolist()
+        return int(self.pin_net[first + names.index(number)]) if number in names else OPEN
+
+    def nets_at(self, pin: str) -> Ids:
+        """Return the net that every instance has at ``pin``, shape (n,), OPEN where it has none.
+
+        Worked out once a pin name; keep what is asked for to pins of storage cells and the like.
+        """
+        if pin not in self._nets_at:
+            nets = np.full(len(self.cell), OPEN, np.int32)
+            rows = np.flatnonzero(self.pin_name == self._pin_numbers.get(pin, -1))
+            nets[self.pin_instance[rows]] = self.pin_net[rows]
+            self._nets_at[pin] = nets
+        return self._nets_at[pin]
+
+    @cached_property
+    def _pin_numbers(self) -> Mapping[str, int]:
+        return {name: number for number, name in enumerate(self.pin_names)}
+
+    @cached_property
+    def _nets_at(self) -> dict[str, Ids]:
+        return {}
 
     @cached_property
     def pin_instance(self) -> Ids:

@@ -21,19 +21,33 @@ class Reducer:
 
     def __init__(self) -> None:
         """Start with nothing worked out."""
-        # By identity: hashing an expression walks it. The entry keeps its expression alive.
-        self._seen: dict[tuple[int, Known], tuple[Expression, Expression]] = {}
+        # By identity: hashing an expression walks it. The entries keep their expressions alive.
+        self._seen: dict[tuple[int, Known], Expression] = {}
+        self._names: dict[int, tuple[Expression, tuple[str, ...]]] = {}
 
-    def reduce(self, expression: Expression, known: Known) -> Expression:
+    def reduce(
+        self, expression: Expression, pins: Mapping[str, int], values: Mapping[int, int]
+    ) -> Expression:
         """Return ``expression`` with the known pins filled in, as simple as its function is.
 
         A result that is a constant, one pin or one inverted pin is recognised in any writing of
         the function; other results may mention pins that do not matter.
+
+        Args:
+            expression: Over pins of one instance.
+            pins: Flat net by pin of the instance.
+            values: Known nets.
         """
+        kept = self._names.get(id(expression))
+        if kept is None:
+            kept = self._names[id(expression)] = (expression, variables(expression))
+        known = tuple(
+            (name, values[net]) for name in kept[1] if (net := pins.get(name, -1)) in values
+        )
         key = (id(expression), known)
         if key not in self._seen:
-            self._seen[key] = (expression, _simplest(expression, known))
-        return self._seen[key][1]
+            self._seen[key] = _simplest(expression, known)
+        return self._seen[key]
 
 
 #: Functions of more free inputs than this are not tabulated.
@@ -67,11 +81,6 @@ def propagate(design: Design, held: Mapping[int, int]) -> dict[int, int]:
             if outputs:
                 waiting += _settle(design, instance, outputs, values, reducer)
     return values
-
-
-def known_pins(design: Design, instance: int, values: Mapping[int, int]) -> Known:
-    """Return the pins of ``instance`` whose nets have a known value."""
-    return tuple((pin, values[net]) for pin, net in design.pins(instance).items() if net in values)
 
 
 def _gate_outputs(cell: Cell | None) -> dict[str, Expression]:
@@ -112,14 +121,12 @@ def _settle(
 ) -> list[int]:
     """Work out one gate's outputs; return the nets that became known."""
     pins = design.pins(instance)
-    known = tuple((pin, values[net]) for pin, net in pins.items() if net in values)
-    known = tuple(item for item in known if item[0] not in outputs)
     found: list[int] = []
     for pin, function in outputs.items():
         net = pins.get(pin, -1)
         if net < 0 or net in values:
             continue
-        value = reducer.reduce(function, known)
+        value = reducer.reduce(function, pins, values)
         if isinstance(value, Const):
             values[net] = int(value.value)
             found.append(net)

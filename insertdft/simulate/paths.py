@@ -12,7 +12,7 @@ from enum import Enum
 from insertdft.design.flat import Design
 from insertdft.library.expression import Const, Expression, Not, Var
 from insertdft.netlist import FIRST_NET
-from insertdft.simulate.constants import Reducer, known_pins
+from insertdft.simulate.constants import Reducer
 
 
 class End(Enum):
@@ -67,72 +67,65 @@ class Walker:
 
     def literal(self, instance: int, expression: Expression) -> Expression:
         """Return an expression over the pins of ``instance`` with known pins filled in."""
-        return self._reducer.reduce(expression, known_pins(self.design, instance, self.values))
+        return self._reducer.reduce(expression, self.design.pins(instance), self.values)
 
     def net_and_parity(self, instance: int, expression: Expression) -> tuple[int, bool] | None:
         """Return the net that alone decides an expression of ``instance``, and whether inverted.
 
         None if several pins decide, or none.
         """
-        return pin_and_parity(self.design, instance, self.literal(instance, expression))
+        pins = self.design.pins(instance)
+        return net_and_parity(pins, self._reducer.reduce(expression, pins, self.values))
 
     def _walk(self, net: int) -> Source:
         inverted = False
         passed: list[int] = []
         seen: set[int] = set()
         while True:
-            end = self._end_at(net)
-            if end is not None:
-                instance, pin = self._driver(net)
-                return Source(end, net, inverted, instance, pin, tuple(passed))
-            if net in seen:
-                return Source(End.LOOP, net, inverted, passed=tuple(passed))
-            seen.add(net)
-            instance, pin = self._driver(net)
-            step = self._step(instance, pin)
+            end, instance, pin = self._look(net)
+            if end is None and net in seen:
+                end = End.LOOP
+            step = self._step(instance, pin) if end is None else None
             if step is None:
-                return Source(End.GATE, net, inverted, instance, pin, tuple(passed))
+                return Source(end or End.GATE, net, inverted, instance, pin, tuple(passed))
+            seen.add(net)
             passed.append(instance)
             net, turned = step
             inverted ^= turned
 
-    def _end_at(self, net: int) -> End | None:
-        """Return what stands at ``net`` if the walk cannot go on from there."""
+    def _look(self, net: int) -> tuple[End | None, int, str]:
+        """Return what ends a walk at ``net`` (None if it goes on), and the driver there."""
         if net in self.values or 0 <= net < FIRST_NET:
-            return End.CONSTANT
-        if net in self.design.input_ports:
-            return End.PORT
-        drivers = self.design.drivers.of(net)
-        if not drivers:
-            return End.UNDRIVEN
-        if len(drivers) > 1:
-            return End.SEVERAL
-        cell = self.design.cell_of(int(self.design.pin_instance[drivers[0]]))
-        if cell is None:
-            return End.BLACK_BOX
-        return End.STORAGE if cell.is_storage else None
-
-    def _driver(self, net: int) -> tuple[int, str]:
-        drivers = self.design.drivers.of(net)
+            return End.CONSTANT, -1, ""
+        design = self.design
+        if net in design.input_ports:
+            return End.PORT, -1, ""
+        drivers = design.drivers.of(net)
         if len(drivers) != 1:
-            return -1, ""
-        row = drivers[0]
-        pin = self.design.pin_names[int(self.design.pin_name[row])]
-        return int(self.design.pin_instance[row]), pin
+            return (End.SEVERAL if drivers else End.UNDRIVEN), -1, ""
+        instance = int(design.pin_instance[drivers[0]])
+        pin = design.pin_names[int(design.pin_name[drivers[0]])]
+        cell = design.cell_of(instance)
+        if cell is None:
+            return End.BLACK_BOX, instance, pin
+        return (End.STORAGE if cell.is_storage else None), instance, pin
 
     def _step(self, instance: int, pin: str) -> tuple[int, bool] | None:
         cell = self.design.cell_of(instance)
         function = cell.pins[pin].function if cell else None
-        if function is None:
-            return None
-        return pin_and_parity(self.design, instance, self.literal(instance, function))
+        return None if function is None else self.net_and_parity(instance, function)
 
 
 def pin_and_parity(design: Design, instance: int, literal: Expression) -> tuple[int, bool] | None:
     """Return net and inversion of a literal over the pins of ``instance``, None if it is none."""
+    return net_and_parity(design.pins(instance), literal)
+
+
+def net_and_parity(pins: Mapping[str, int], literal: Expression) -> tuple[int, bool] | None:
+    """Return net and inversion of a literal over pins whose nets are given, None if it is none."""
     inverted = isinstance(literal, Not)
     inner = literal.part if isinstance(literal, Not) else literal
     if not isinstance(inner, Var) or isinstance(literal, Const):
         return None
-    net = design.pins(instance).get(inner.name)
-    return None if net is None or net < 0 else (net, inverted)
+    net = pins.get(inner.name, -1)
+    return None if net < 0 else (net, inverted)

@@ -1,16 +1,16 @@
 """Where each storage cell's clock comes from, and whether a tester controls it."""
 
 from collections import defaultdict
-from collections.abc import Mapping
 from dataclasses import dataclass
-from typing import Final
+from typing import Final, NamedTuple
 
 from insertdft.design.flat import Design
-from insertdft.library.cell import Storage, StorageKind
-from insertdft.library.expression import Expression, Not, variables
+from insertdft.library.cell import Cell, StorageKind
+from insertdft.library.expression import Not, Var, as_literal, variables
 from insertdft.netlist import Ids
-from insertdft.simulate.paths import End, Source, Walker, pin_and_parity
+from insertdft.simulate.paths import End, Source, Walker
 from insertdft.survey.facts import Domain
+from insertdft.survey.grouping import by_net
 from insertdft.survey.verdict import Verdict
 
 SLUG: Final = "clock-not-controllable"
@@ -18,25 +18,16 @@ SLUG: Final = "clock-not-controllable"
 
 @dataclass(frozen=True, slots=True)
 class Clocks:
-    """Domains, and the domain of each storage cell that has one (flat id -> index)."""
+    """Domains, and the storage cells (flat ids) of each."""
 
     domains: tuple[Domain, ...]
-    of: Mapping[int, int]
+    cells: tuple[tuple[int, ...], ...]
 
 
 def find_clocks(walker: Walker, storage: Ids, verdict: Verdict) -> Clocks:
     """Trace every clock pin to its port; report those that reach none."""
-    by_pin: defaultdict[tuple[int, bool, bool], list[int]] = defaultdict(list)
-    unreadable: list[int] = []
-    for cell in storage.tolist():
-        pin = clock_pin(walker, cell)
-        if pin is None:
-            unreadable.append(cell)
-        else:
-            by_pin[pin].append(cell)
-    _report_unreadable(walker.design, unreadable, verdict)
-    numbers: dict[Domain, int] = {}
-    of: dict[int, int] = {}
+    by_pin = _by_clock_pin(walker, storage, verdict)
+    found: defaultdict[Domain, list[int]] = defaultdict(list)
     for (net, inverted, level), cells in by_pin.items():
         source = walker.source(net)
         if source.end is not End.PORT:
@@ -45,34 +36,57 @@ def find_clocks(walker: Walker, storage: Ids, verdict: Verdict) -> Clocks:
         active_low = source.inverted ^ inverted
         edge = ("low" if active_low else "high") if level else ("fall" if active_low else "rise")
         domain = Domain(walker.design.input_ports[source.net], edge)
-        of.update(dict.fromkeys(cells, numbers.setdefault(domain, len(numbers))))
-    return Clocks(tuple(numbers), of)
+        found[domain] += cells
+    return Clocks(tuple(found), tuple(map(tuple, found.values())))
 
 
-def clock_pin(walker: Walker, cell: int) -> tuple[int, bool, bool] | None:
-    """Return (net, inverted, level-sensitive) of the one clock of a storage cell.
+class ClockPin(NamedTuple):
+    """The one clock of a storage cell: pin, whether its inverse acts, whether by level."""
+
+    pin: str
+    inverted: bool
+    level: bool
+
+
+def clock_pin(cell: Cell) -> ClockPin | None:
+    """Return the clock pin of a cell that the library describes by one ff or latch group.
 
     None if the cell is described by a state table, has several clocks, or a clock that depends on
     more than one pin.
     """
-    described = walker.design.cell_of(cell)
-    if described is None or len(described.storage) != 1:
+    if len(cell.storage) != 1:
         return None
-    storage = described.storage[0]
+    storage = cell.storage[0]
     if storage.clock is None or storage.clock_also is not None:
         return None
-    found = _literal_pin(walker, cell, storage)
-    return None if found is None else (*found, storage.kind is StorageKind.LATCH)
-
-
-def _literal_pin(walker: Walker, cell: int, storage: Storage) -> tuple[int, bool] | None:
-    clock = storage.clock
-    if clock is None:
+    literal = as_literal(storage.clock, variables(storage.clock))
+    inner = literal.part if isinstance(literal, Not) else literal
+    if not isinstance(inner, Var):
         return None
-    literal: Expression = clock
-    if len(variables(clock)) > 1 or (isinstance(clock, Not) and len(variables(clock)) != 1):
-        literal = walker.literal(cell, clock)
-    return pin_and_parity(walker.design, cell, literal)
+    return ClockPin(inner.name, isinstance(literal, Not), storage.kind is StorageKind.LATCH)
+
+
+def _by_clock_pin(
+    walker: Walker, storage: Ids, verdict: Verdict
+) -> dict[tuple[int, bool, bool], list[int]]:
+    """Return the cells of each (net, inverted, level), in order of the first cell."""
+    design = walker.design
+    found: defaultdict[tuple[int, bool, bool], list[int]] = defaultdict(list)
+    unreadable: list[int] = []
+    kinds = design.cell[storage]
+    for kind in dict.fromkeys(kinds.tolist()):
+        cells = storage[kinds == kind]
+        described = design.cells[kind]
+        clock = clock_pin(described) if described else None
+        if clock is None:
+            unreadable += cells.tolist()
+            continue
+        nets = design.nets_at(clock.pin)[cells]
+        unreadable += cells[nets < 0].tolist()
+        for net, those in by_net(cells, nets).items():
+            found[net, clock.inverted, clock.level] += those
+    _report_unreadable(design, unreadable, verdict)
+    return dict(sorted(found.items(), key=lambda item: item[1][0]))
 
 
 def _report_unreadable(design: Design, cells: list[int], verdict: Verdict) -> None:
@@ -83,8 +97,8 @@ def _report_unreadable(design: Design, cells: list[int], verdict: Verdict) -> No
         verdict.leave_out(
             SLUG,
             those,
-            f"cell `{kind}` has no single clock pin that the library describes",
-            "give a library that describes its clock by clocked_on or enable",
+            f"cell `{kind}` has no single clock pin that is described and connected",
+            "connect it, or give a library that describes its clock by clocked_on or enable",
         )
 
 

@@ -39,15 +39,15 @@ def survey(
     find_kept(verdict, storage, kept)
     clocks = find_clocks(walker, storage, verdict)
     set_resets = find_set_resets(walker, storage, verdict)
-    domain = np.array(
-        [LEFT_ALONE if cell in verdict.reasons else clocks.of[cell] for cell in storage.tolist()],
-        np.int32,
-    )
+    domain = np.full(len(design.cell), LEFT_ALONE, np.int32)
+    for number, cells in enumerate(clocks.cells):
+        domain[np.array(cells, np.int64)] = number
+    domain[np.array(list(verdict.reasons), np.int64)] = LEFT_ALONE
     area, without_area = total_area(design)
     return Survey(
         design=design,
         storage=storage,
-        domain=domain,
+        domain=domain[storage],
         domains=clocks.domains,
         held=tuple(HeldPort(port, value) for port, value in promised.items()),
         set_resets=set_resets,

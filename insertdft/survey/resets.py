@@ -4,17 +4,19 @@ from collections import defaultdict
 from collections.abc import Iterator
 from typing import Final
 
-from insertdft.library.expression import Const, Expression, Not, Var, variables
+from insertdft.library.cell import Cell
+from insertdft.library.expression import Const, Expression, Not, Var, as_literal, variables
 from insertdft.netlist import Ids
 from insertdft.simulate.paths import End, Walker
 from insertdft.survey.clocks import what
 from insertdft.survey.facts import HeldPort
+from insertdft.survey.grouping import by_net
 from insertdft.survey.verdict import Verdict
 
 SLUG: Final = "reset-not-controllable"
 HINT: Final = "hold the ports that keep it off with --hold PORT=VALUE, or drive it from a port"
 
-#: One asynchronous control of one cell: (net, value that acts), or the value of a constant.
+#: One asynchronous control: (net, value that acts).
 Control = tuple[int, int]
 
 
@@ -26,39 +28,52 @@ def find_set_resets(walker: Walker, storage: Ids, verdict: Verdict) -> tuple[Hel
     by_control: defaultdict[Control, list[int]] = defaultdict(list)
     always: list[int] = []
     mixed: list[int] = []
-    for cell in storage.tolist():
-        for control in _controls(walker, cell):
-            if control is None:
-                mixed.append(cell)
-            elif isinstance(control, bool):
-                always += [cell] if control else []
-            else:
-                by_control[control].append(cell)
+    design = walker.design
+    kinds = design.cell[storage]
+    for kind in dict.fromkeys(kinds.tolist()):
+        cells = storage[kinds == kind]
+        for condition in _conditions(design.cells[kind]):
+            pin = _single_pin(condition)
+            if pin is None:
+                _sort_mixed(walker, cells.tolist(), condition, always, mixed)
+                continue
+            name, acts = pin
+            nets = design.nets_at(name)[cells]
+            mixed += cells[nets < 0].tolist()
+            for net, those in by_net(cells, nets).items():
+                if net not in walker.values:
+                    by_control[net, acts] += those
+                elif walker.values[net] == acts:
+                    always += those
     _report_rest(always, mixed, verdict)
     return _hold(walker, by_control, verdict)
 
 
-def _controls(walker: Walker, cell: int) -> Iterator[Control | bool | None]:
-    described = walker.design.cell_of(cell)
-    for storage in described.storage if described else ():
-        for condition in (storage.clear, storage.preset):
-            if condition is not None:
-                yield _control(walker, cell, condition)
+def _conditions(cell: Cell | None) -> Iterator[Expression]:
+    for storage in cell.storage if cell else ():
+        yield from (at for at in (storage.clear, storage.preset) if at is not None)
 
 
-def _control(walker: Walker, cell: int, condition: Expression) -> Control | bool | None:
-    """Return net and acting value, a bool where constant, None where several signals decide."""
-    literal = condition if len(variables(condition)) == 1 else walker.literal(cell, condition)
-    inner = literal.part if isinstance(literal, Not) else literal
-    if isinstance(inner, Const):
-        return inner.value
-    if not isinstance(inner, Var):
-        return None
-    acts = 0 if isinstance(literal, Not) else 1
-    net = walker.design.pins(cell).get(inner.name, -1)
-    if net in walker.values:
-        return walker.values[net] == acts
-    return (net, acts) if net >= 0 else None
+def _single_pin(condition: Expression) -> tuple[str, int] | None:
+    """Return pin and acting value of a condition that one pin decides."""
+    literal = as_literal(condition, variables(condition))
+    if isinstance(literal, Var):
+        return literal.name, 1
+    if isinstance(literal, Not) and isinstance(literal.part, Var):
+        return literal.part.name, 0
+    return None
+
+
+def _sort_mixed(
+    walker: Walker, cells: list[int], condition: Expression, always: list[int], mixed: list[int]
+) -> None:
+    """Sort cells whose set or reset is decided by several pins: only constants can settle it."""
+    for cell in cells:
+        literal = walker.literal(cell, condition)
+        if not isinstance(literal, Const):
+            mixed.append(cell)
+        elif literal.value:
+            always.append(cell)
 
 
 def _report_rest(always: list[int], mixed: list[int], verdict: Verdict) -> None:
