@@ -31,8 +31,8 @@ from insertdft.library.finders import (
     find_ties,
 )
 from insertdft.library.primitives import primitive_cell
-from insertdft.library.read import read_library
-from insertdft.library.twins import check_twin, scan_twins
+from insertdft.library.read import read_library, read_models
+from insertdft.library.twins import check_twin, same_function, scan_twins
 
 __all__ = [
     "Arc",
@@ -64,5 +64,7 @@ __all__ = [
     "find_ties",
     "primitive_cell",
     "read_library",
+    "read_models",
+    "same_function",
     "scan_twins",
 ]

@@ -57,7 +57,7 @@ def mission_of(cell: Cell, role: ScanRole | None = None) -> Mission | None:
         off = {}
         storage = cell.storage
         functions = {pin.name: pin.function for pin in cell.outputs()}
-    if not storage:
+    if role is not None and not storage:
         return None
     only = {item.pin for item in role.outputs if item.test_only} if role else set()
     outputs = {

@@ -11,7 +11,14 @@ from typing import Final, NamedTuple, Protocol
 
 from insertdft.library.cell import Storage, StorageKind
 from insertdft.library.expression import Const, Expression, Not, Or, Var, negation
-from insertdft.library.functions import cofactor, from_table, pruned, support, within
+from insertdft.library.functions import (
+    choose,
+    cofactor,
+    from_table,
+    pruned,
+    support,
+    within,
+)
 
 Value = int | None
 
@@ -91,21 +98,17 @@ def latch_of(
         inverse: Name for its inverse.
         inputs: Pins, in the order in which clear and preset are looked for.
     """
-    forced: dict[bool, list[Expression]] = {False: [], True: []}
-    dominant: bool | None = None
     rest = pruned(following)
     if state not in support(rest):
         return None
-    for name, value in product(inputs, (0, 1)):
-        held = cofactor(rest, name, value)
-        if isinstance(held, Const):
-            dominant = held.value if dominant is None else dominant
-            forced[held.value].append(Var(name) if value else Not(Var(name)))
-            rest = cofactor(rest, name, 1 - value)
+    found = take_out_forced(rest, inputs)
+    rest = found.rest
     when0, when1 = cofactor(rest, state, 0), cofactor(rest, state, 1)
     if pruned(_and(when0, negation(when1))) != Const(False):
         return None  # it would oscillate
     enable = pruned(Or((when0, negation(when1))))
+    if enable == Const(False) and not (found.clear or found.preset):
+        return None
     return Storage(
         StorageKind.LATCH,
         state,
@@ -113,10 +116,37 @@ def latch_of(
         1,
         within(when0, enable) if enable != Const(False) else None,
         enable if enable != Const(False) else None,
-        clear=_any(forced[False]),
-        preset=_any(forced[True]),
-        clear_preset=("H", "L") if dominant else ("L", "H"),
+        clear=found.clear,
+        preset=found.preset,
+        clear_preset=found.together,
     )
+
+
+class Forced(NamedTuple):
+    """Pins that alone force a state: to 0, to 1, what both do, and what is left without them."""
+
+    clear: Expression | None
+    preset: Expression | None
+    together: tuple[str | None, str | None]
+    rest: Expression
+
+
+def take_out_forced(following: Expression, inputs: Sequence[str]) -> Forced:
+    """Return the pins that alone force the value of ``following``; the first found dominates."""
+    forced: dict[bool, list[Expression]] = {False: [], True: []}
+    dominant: bool | None = None
+    rest, before = following, None
+    while rest != before:
+        before = rest
+        for name, value in product(inputs, (0, 1)):
+            held = cofactor(rest, name, value)
+            if isinstance(held, Const) and name in support(rest):
+                dominant = held.value if dominant is None else dominant
+                forced[held.value].append(Var(name) if value else Not(Var(name)))
+                rest = cofactor(rest, name, 1 - value)
+    together = ("H", "L") if dominant else ("L", "H")
+    both = together if all(forced.values()) else (None, None)
+    return Forced(_any(forced[False]), _any(forced[True]), both, rest)
 
 
 def _and(first: Expression, second: Expression) -> Expression:
@@ -200,15 +230,29 @@ def _flip_flop(box: Steps, clock: str) -> Storage | None:
         values = {box.settle(own, own, {node: value})[node] for value in (0, 1)}
         if values in ({0}, {1}):
             forced[values.pop() or 0] |= 1 << pattern
+    held = forced[0] | forced[1]
     for rising in (True, False):
-        data = _edge_data(box, clock, rising=rising)
-        if data is None or not _keeps(box, clock, forced[0] | forced[1], rising=not rising):
+        data = _edge_data(box, clock, held, rising=rising)
+        if data is None or not _keeps(box, clock, held, rising=not rising):
             continue
         edge: Expression = Var(clock) if rising else Not(Var(clock))
-        clear, preset = (_or_none(from_table(forced[v], box.inputs)) for v in (0, 1))
-        kind = StorageKind.FLIP_FLOP
-        return Storage(kind, node, f"!{node}", 1, data, edge, clear=clear, preset=preset)
+        clear, preset, both = _asynchronous(box, forced)
+        kind, name = StorageKind.FLIP_FLOP, f"!{node}"
+        return Storage(kind, node, name, 1, data, edge, None, clear, preset, both)
     return None
+
+
+def _asynchronous(
+    box: Steps, forced: Mapping[int, int]
+) -> tuple[Expression | None, Expression | None, tuple[str | None, str | None]]:
+    """Return clear, preset and what both do, as single pins where they are."""
+    [node] = box.nodes
+    low, high = (from_table(forced[value], box.inputs) for value in (0, 1))
+    at_rest = choose(high, Const(True), choose(low, Const(False), Var(node)))
+    found = take_out_forced(pruned(at_rest), box.inputs)
+    if found.rest == Var(node):
+        return found.clear, found.preset, found.together
+    return _or_none(low), _or_none(high), (None, None)
 
 
 def _or_none(expression: Expression) -> Expression | None:
@@ -216,29 +260,32 @@ def _or_none(expression: Expression) -> Expression | None:
     return None if found == Const(False) else found
 
 
-def _edge_data(box: Steps, clock: str, *, rising: bool) -> Expression | None:
-    """Return the next state at an edge as a function of inputs and state, or None."""
+def _edge_data(box: Steps, clock: str, held: int, *, rising: bool) -> Expression | None:
+    """Return the next state at an edge as a function of inputs and state, or None.
+
+    ``held`` are the patterns of inputs in which set or reset decides.
+    """
     [node] = box.nodes
-    names = [*(name for name in box.inputs if name != clock), node]
     ones = care = 0
-    for pattern, own in enumerate(patterns(names)):
-        state = own.pop(node)
-        before, after = {**own, clock: int(not rising)}, {**own, clock: int(rising)}
-        if box.settle(after, after, {node: state})[node] != state:
-            continue  # set or reset holds it
-        value = box.settle(before, after, {node: state})[node]
-        if value is not None:
-            care |= 1 << pattern
-            ones |= value << pattern
-    found = pruned(from_table(ones, names, care))
+    for pattern, after in enumerate(patterns(box.inputs)):
+        if after[clock] != int(rising) or held >> pattern & 1:
+            continue
+        before = {**after, clock: int(not rising)}
+        for state in (0, 1):
+            value = box.settle(before, after, {node: state})[node]
+            if value is not None:
+                place = pattern | state << len(box.inputs)
+                care |= 1 << place
+                ones |= value << place
+    found = pruned(from_table(ones, [*box.inputs, node], care))
     return None if found == Var(node) else found
 
 
-def _keeps(box: Steps, clock: str, forced: int, *, rising: bool) -> bool:
+def _keeps(box: Steps, clock: str, held: int, *, rising: bool) -> bool:
     """Return whether an edge leaves the state alone wherever nothing forces it."""
     [node] = box.nodes
     for pattern, after in enumerate(patterns(box.inputs)):
-        if after[clock] != int(rising) or forced >> pattern & 1:
+        if after[clock] != int(rising) or held >> pattern & 1:
             continue
         before = {**after, clock: int(not rising)}
         if any(box.settle(before, after, {node: v})[node] not in (v, None) for v in (0, 1)):

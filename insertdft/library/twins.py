@@ -99,6 +99,23 @@ def check_twin(plain: Cell, scan: Cell, twin: Twin) -> bool:
     )
 
 
+def same_function(first: Cell, second: Cell) -> bool:
+    """Return whether two cells with the same pin names behave alike.
+
+    What the first leaves open the second may choose. Cells that say nothing are not alike.
+    """
+    one, two = mission_of(first), mission_of(second)
+    if one is None or two is None or not one.outputs or set(one.outputs) != set(two.outputs):
+        return False
+    if len(one.storage) != len(two.storage):
+        return False
+    pins = {name: name for name in {**one.places, **two.places}}
+    return any(
+        all(_same_output(one, out, two.outputs[pin], how) for pin, out in one.outputs.items())
+        for how in _state_maps(one, two, pins, {})
+    )
+
+
 def _may_match(one: Mission, two: Mission) -> bool:
     if len(one.storage) != len(two.storage) or len(one.outputs) > len(two.outputs):
         return False
