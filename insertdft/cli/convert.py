@@ -80,7 +80,7 @@ def command(
     out: Path,
     as_json: bool,
 ) -> int:
-    r"""Turn a netlist into one that can be tested by scan.
+    """Turn a netlist into one that can be tested by scan.
 
     Every storage cell that a tester can control becomes a scan cell, the cells are strung into
     balanced chains, and every chain is walked again in the written text. All else in the netlist

@@ -24,7 +24,7 @@ def command(
     hold: dict[str, int],
     as_json: bool,
 ) -> int:
-    r"""Show the storage, clocks and resets of a netlist, and what keeps cells out of chains.
+    """Show the storage, clocks and resets of a netlist, and what keeps cells out of chains.
 
     \b
     Example:

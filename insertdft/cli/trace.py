@@ -42,7 +42,7 @@ def command(
     out: Path | None,
     as_json: bool,
 ) -> int:
-    r"""Walk every scan chain from scan-out to scan-in and compare it with a description.
+    """Walk every scan chain from scan-out to scan-in and compare it with a description.
 
     Any scan netlist will do, whoever made it. Without --chains the chains are found from the scan
     cells; where cells are composed of a mux and a flip-flop, say with --hold which port shifts.
