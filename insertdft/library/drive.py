@@ -13,7 +13,7 @@ from typing import Final
 from insertdft.library.cell import Cell, Pin, Table
 
 _LOAD_AXIS: Final = "total_output_net_capacitance"
-_LAST_NUMBER: Final = re.compile(r"(\d+)\D*\Z")
+_LAST_NUMBER: Final = re.compile(r"(\d+)[A-Za-z]{0,3}\Z")
 
 
 def steps_apart(first: Cell, first_pin: str, second: Cell, second_pin: str) -> int:
@@ -41,7 +41,12 @@ def _by_slope(_cell: Cell, pin: Pin) -> float | None:
 
 
 def _by_name(cell: Cell, _pin: Pin) -> float | None:
-    found = _LAST_NUMBER.search(cell.name)
+    return drive_number(cell.name)
+
+
+def drive_number(name: str) -> float | None:
+    """Return the number that ends a cell's name (up to three letters may follow), or None."""
+    found = _LAST_NUMBER.search(name)
     return float(found[1]) if found else None
 
 

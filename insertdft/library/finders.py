@@ -1,15 +1,18 @@
 """Cells of a library found by what they do, never by name.
 
 Every finder leaves out stand-ins, power-management cells and what the library wants unused, and
-sorts by area, then name. Cells of unknown area come last.
+sorts by area, then name. Cells of unknown area (from Verilog models) come last, by the number that
+ends the name.
 """
 
+import math
 from collections.abc import Callable, Iterator
 from dataclasses import dataclass
 from itertools import permutations
 from typing import Final
 
 from insertdft.library.cell import Cell, Library, Pin, StorageKind
+from insertdft.library.drive import drive_number
 from insertdft.library.expression import And, Const, Expression, Not, Or, Var, Xor
 from insertdft.library.functions import literal, pruned, same, support
 from insertdft.library.mission import one_state
@@ -226,11 +229,14 @@ def _usable(library: Library) -> list[Cell]:
         for cell in library.cells.values()
         if not (cell.dont_use or cell.stand_in or cell.power_management)
     ]
-    return sorted(cells, key=lambda cell: (*_area(cell), cell.name))
+    return sorted(cells, key=_size)
 
 
-def _area(cell: Cell) -> tuple[bool, float]:
-    return cell.area is None, cell.area or 0.0
+def _size(cell: Cell) -> tuple[float, float, int, str]:
+    """Return the area; where it is unknown, the number that ends the name, then its length."""
+    if cell.area is not None:
+        return cell.area, 0.0, 0, cell.name
+    return math.inf, drive_number(cell.name) or math.inf, len(cell.name), cell.name
 
 
 def _single_outputs(library: Library) -> Iterator[tuple[Cell, Pin, Expression]]:

@@ -6,6 +6,7 @@ from typing import Final
 
 from insertdft.diagnostics import Diagnostic, Severity
 from insertdft.library.cell import Cell, ScanRole, Storage, StorageKind
+from insertdft.library.clock_gates import with_clock_gates
 from insertdft.library.declared import (
     LibraryHints,
     library_hints,
@@ -28,7 +29,7 @@ def with_roles(cells: Mapping[str, Cell]) -> tuple[dict[str, Cell], list[Diagnos
     Also fills the storage of cells whose state table is latches or a flip-flop, and of those that
     have a ``test_cell`` alone.
     """
-    completed = {name: _with_storage(cell) for name, cell in cells.items()}
+    completed = with_clock_gates({name: _with_storage(cell) for name, cell in cells.items()})
     hints = library_hints(list(completed.values()))
     found: dict[str, Cell] = {}
     problems: list[Diagnostic] = []
