@@ -2,11 +2,11 @@
 
 from typing import Final, NamedTuple
 
-from insertdft.netlist import Vector
 from insertdft.netlist.names import KEYWORDS
 from insertdft.source.complaints import Complaints, word_at
-from insertdft.source.draft import Assign, Draft
+from insertdft.source.draft import Draft
 from insertdft.source.nets import PortDeclaration, spelling
+from insertdft.text import Span
 
 NET_KINDS: Final = frozenset(
     "wire tri tri0 tri1 wand triand wor trior trireg uwire supply0 supply1".split()
@@ -35,40 +35,46 @@ class Declared(NamedTuple):
 
 def declare(draft: Draft, item: Declared, complaints: Complaints) -> None:
     """Enter one name."""
-    span = word_at(draft.prepared.source, item.offset)
+    problem = _problem(draft, item)
+    if problem is not None:
+        complaints.error(problem[0], problem[1], _span(draft, item), problem[2])
+        return
     nets = draft.nets
-    if item.name in KEYWORDS:
-        complaints.error(
-            "netlist-syntax", f"`{item.name}` is a keyword, not a name", span, "rename the net"
-        )
-        return
-    if item.limits and abs(item.limits[0] - item.limits[1]) >= _WIDEST:
-        complaints.error(
-            "netlist-unsupported",
-            f"`{item.name}` is wider than {_WIDEST} bits",
-            span,
-            "check its range",
-        )
-        return
-    if _is_repeated(draft, item):
-        complaints.error(
-            "name-duplicate",
-            f"`{item.name}` is declared twice in module `{draft.name}`",
-            span,
-            "take one of the declarations out, or rename one net",
-        )
-        return
-    was_net = nets.is_declared(item.name) and item.name not in nets.ports
-    if not nets.is_declared(item.name):
+    is_known = nets.is_declared(item.name)
+    was_net = is_known and item.name not in nets.ports
+    if not is_known:
         _enter(draft, item)
     elif _limits(draft, item.name) != item.limits:
         complaints.error(
             "width-mismatch",
             f"the two declarations of `{item.name}` have different ranges",
-            span,
+            _span(draft, item),
             "give both the same range",
         )
     _note(draft, item, was_net=was_net)
+
+
+def _span(draft: Draft, item: Declared) -> Span:
+    return word_at(draft.prepared.source, item.offset)
+
+
+def _problem(draft: Draft, item: Declared) -> tuple[str, str, str] | None:
+    """Return slug, message and hint of what forbids the declaration."""
+    if item.name in KEYWORDS:
+        return "netlist-syntax", f"`{item.name}` is a keyword, not a name", "rename the net"
+    if item.limits and abs(item.limits[0] - item.limits[1]) >= _WIDEST:
+        return (
+            "netlist-unsupported",
+            f"`{item.name}` is wider than {_WIDEST} bits",
+            "check its range",
+        )
+    if _is_repeated(draft, item):
+        return (
+            "name-duplicate",
+            f"`{item.name}` is declared twice in module `{draft.name}`",
+            "take one of the declarations out, or rename one net",
+        )
+    return None
 
 
 def _is_repeated(draft: Draft, item: Declared) -> bool:
@@ -103,11 +109,8 @@ def _note(draft: Draft, item: Declared, *, was_net: bool) -> None:
     if item.kind and item.kind != "wire":
         nets.kinds[item.name] = item.kind
     if item.kind in ("supply0", "supply1"):
-        tie = nets.number[f"1'b{item.kind[-1]}"]
         limits = item.limits
-        keys = (
-            [f"{spelling(item.name)}[{index}]" for index in Vector(*limits, 0).indices()]
-            if limits
-            else [spelling(item.name)]
-        )
-        draft.assigns += [Assign(nets.number[key], tie, item.offset) for key in keys]
+        width = abs(limits[0] - limits[1]) + 1 if limits else 1
+        tie = f"1'b{item.kind[-1]}"
+        right = tie if width == 1 else f"{{{width}{{{tie}}}}}"
+        draft.assign(spelling(item.name), right, item.offset)

@@ -9,29 +9,21 @@ import re
 from array import array
 from collections import defaultdict
 from collections.abc import Sequence
-from itertools import count
+from itertools import count, islice
 from typing import Final, NamedTuple, Protocol
 
 import numpy as np
 
 from insertdft.netlist import Header, Ids, Offsets
 from insertdft.netlist.names import canonical
-from insertdft.source.nets import Nets
+from insertdft.source.bodies import NOTHING, PinTable, take_apart
+from insertdft.source.nets import Nets, kept
+from insertdft.source.patterns import ODD, ODD_INSTANCE, WIRES
 from insertdft.source.preprocess import Prepared
 from insertdft.source.tokens import NAME
 
-#: Instances read between two rounds of taking bodies apart.
-BATCH: Final = 8192
-
-#: A simple expression without parentheses, without blanks around it. The blank that closes an
-#: escaped name belongs to it.
-_EXPRESSION: Final = r"(?:[^()\\\s]++|\\\S++\s|\s++(?!\)))*+"
-_PIN: Final = re.compile(
-    rf"\.\s*+({NAME}|\#\d++)\s*+\(\s*+({_EXPRESSION})\s*+\)\s*+(?:,\s*+(?=\.)|(?=\)))|\)\s*+;",
-    re.ASCII,
-)
 _TERM: Final = re.compile(r"(?:\A|,)((?:[^,\\]++|\\\S++)*+)", re.ASCII)
-_WIRE: Final = re.compile(NAME, re.ASCII)
+_WIRE: Final = re.compile(rf"(?:wire\s++)?+({NAME})", re.ASCII)
 
 
 class Tables:
@@ -39,14 +31,13 @@ class Tables:
 
     Attributes:
         cells: Cell name -> id.
-        pins: Pin name -> id; ``#i`` for the i-th connection by position. Id 0 ends an instance.
+        pins: Pin names.
     """
 
     def __init__(self) -> None:
         """Start empty."""
         self.cells: defaultdict[str, int] = defaultdict(count().__next__)
-        self.pins: defaultdict[str | None, int] = defaultdict(count().__next__)
-        self.pins[None]
+        self.pins = PinTable()
 
 
 class Row(NamedTuple):
@@ -79,6 +70,22 @@ class Assign(NamedTuple):
     start: int
 
 
+class _Columns(NamedTuple):
+    """Instances on their way into a draft: the fields of ``Row``, each for all of them."""
+
+    cells: Sequence[str]
+    names: Sequence[str]
+    bodies: Sequence[str]
+    parameters: Sequence[str | None]
+    before: Sequence[int]
+    start: Sequence[int]
+    end: Sequence[int]
+
+
+def _columns(rows: Sequence[Row]) -> _Columns:
+    return _Columns(*zip(*rows, strict=True))
+
+
 class ReadsOneByOne(Protocol):
     """Reads what does not fit the bulk ways."""
 
@@ -103,10 +110,8 @@ class Draft:
         renamed: Internal name -> name of the port, where the header has ``.port(net)``.
         nets: Declared nets and expression numbers.
         parameter_names: Names of the module's own parameters.
-        pending: Statements of instances not yet taken apart.
-        wires: Spans of name lists of scalar wires not yet declared.
         names: Instance names.
-        assigns: Continuous assignments.
+        assigns: Continuous assignments, once it is closed.
         parameters: Parameter overrides by instance.
     """
 
@@ -126,12 +131,11 @@ class Draft:
         self.renamed: dict[str, str] = {}
         self.nets = Nets()
         self.parameter_names: set[str] = set()
-        self.pending: list[re.Match[str]] = []
-        self.wires: list[tuple[int, int]] = []
         self.names: list[str] = []
         self.assigns: list[Assign] = []
         self.parameters: dict[int, str] = {}
         self._by_grammar = by_grammar
+        self._assign_texts: list[tuple[str, str, int]] = []
         self._offsets = (array("q"), array("q"), array("q"))
         self._cells: list[Ids] = []
         self._pins: list[Ids] = []
@@ -140,18 +144,53 @@ class Draft:
 
     def assign(self, left: str, right: str, start: int) -> None:
         """Keep one assignment by the texts of its sides."""
-        number = self.nets.number
-        self.assigns.append(Assign(number[_trim(left)], number[_trim(right)], start))
+        self._assign_texts.append((left, right, start))
 
-    def flush(self) -> None:
-        """Declare and take apart everything that waits."""
-        self._flush_wires()
-        if not self.pending:
+    def close(self, end: int) -> None:
+        """Finish reading: ``endmodule`` stands at ``end``."""
+        self.body_end = end
+        # Numbered last, so that the names in it are not met before their declarations.
+        number = self.nets.number
+        self.assigns = [
+            Assign(number[_trim(left)], number[_trim(right)], start)
+            for left, right, start in self._assign_texts
+        ]
+
+    def add_wires(self, matches: Sequence[re.Match[str]]) -> None:
+        """Declare the scalar wires of statements that the scanner's pattern has answered."""
+        names = _WIRE.findall(" ".join([match[WIRES] for match in matches]))
+        met_before = self.nets.declare_fresh(names)
+        if not met_before:
             return
-        matches, self.pending = self.pending, []
-        if not self._add(list(map(_row, matches))):
-            for match in matches:
-                self._add_one(match)
+        code = self.prepared.code
+        spans = (match.span(WIRES) for match in matches)
+        found = (name.start(1) for span in spans for name in _WIRE.finditer(code, *span))
+        offsets = list(islice(found, met_before[-1] + 1))
+        for place in met_before:
+            self._by_grammar.declare_wire(self, canonical(names[place]), offsets[place])
+
+    def add_plain(self, matches: Sequence[re.Match[str]]) -> None:
+        """Take instances of the plainest form, each of which starts where the last one ended."""
+        cells, names, bodies = zip(*[match.group(1, 2, 3) for match in matches], strict=True)
+        starts = [match.start(1) for match in matches]
+        ends = [match.end() for match in matches]
+        before = [matches[0].start(), *ends[:-1]]
+        columns = _Columns(cells, names, bodies, (), before, starts, ends)
+        if not self._add(columns):
+            self.add_mixed(matches)
+
+    def add_mixed(self, matches: Sequence[re.Match[str]]) -> None:
+        """Take instances of any form that the scanner's pattern answers."""
+        rows = list(map(_row, matches))
+        if self._add(_columns(rows)):
+            return
+        if len(rows) > 1:
+            half = len(rows) // 2
+            self.add_mixed(matches[:half])
+            self.add_mixed(matches[half:])
+        else:
+            row = rows[0]
+            self.add_rows(self._by_grammar.read_instances(row.before, row.start, row.end))
 
     def add_rows(self, rows: Sequence[Row]) -> None:
         """Take instances whose bodies are in order.
@@ -159,57 +198,27 @@ class Draft:
         Raises:
             RuntimeError: They are not, which is a defect of whoever made them.
         """
-        self.flush()
-        if rows and not self._add(rows):
+        if rows and not self._add(_columns(rows)):
             raise RuntimeError(f"bodies cannot be taken apart: {rows}")
 
-    def _add_one(self, match: re.Match[str]) -> None:
-        row = _row(match)
-        if not self._add([row]):
-            self.add_rows(self._by_grammar.read_instances(row.before, row.start, row.end))
-
-    def _flush_wires(self) -> None:
-        spans, self.wires = self.wires, []
-        for first in range(0, len(spans), BATCH):
-            self._add_wires(spans[first : first + BATCH])
-
-    def _add_wires(self, spans: list[tuple[int, int]]) -> None:
-        code = self.prepared.code
-        names = _WIRE.findall(",".join([code[start:end] for start, end in spans]))
-        met_before = self.nets.declare_fresh(names)
-        if met_before:
-            offsets = [
-                name.start() for start, end in spans for name in _WIRE.finditer(code, start, end)
-            ]
-            for place in met_before:
-                self._by_grammar.declare_wire(self, canonical(names[place]), offsets[place])
-
-    def _add(self, rows: Sequence[Row]) -> bool:
-        cells, names, bodies, parameters, *offsets = zip(*rows, strict=True)
-        parts = _PIN.split(";".join(bodies) + ";")
-        pins: list[str | None] = parts[1::3]
-        if "".join(parts[::3]) or pins.count(None) != len(rows):
+    def _add(self, columns: "_Columns") -> bool:
+        """Add instances, all or (if a body cannot be taken apart) none."""
+        found = take_apart(columns.bodies, self.tables.pins)
+        if found is None:
             return False
-        ids = np.fromiter(map(self.tables.pins.__getitem__, pins), np.int32, len(pins))
-        is_pin = ids > 0
-        texts: list[str] = [text for text in parts[2::3] if text is not None]
-        numbers = np.fromiter(map(self.nets.number.__getitem__, texts), np.int32, len(texts))
-        ends = np.flatnonzero(~is_pin)
-        self._counts.append((np.diff(ends, prepend=-1) - 1).astype(np.int32))
-        self._pins.append(ids[is_pin])
-        self._numbers.append(numbers)
-        self._cells.append(
-            np.fromiter(map(self.tables.cells.__getitem__, cells), np.int32, len(cells))
-        )
-        self._add_names(names, parameters)
-        for column, values in zip(self._offsets, offsets, strict=True):
+        self._pins.append(found.pins)
+        self._numbers.append(_ids(self.nets.number, found.expressions))
+        self._counts.append(found.counts)
+        self._cells.append(_ids(self.tables.cells, columns.cells))
+        self._add_names(columns.names, columns.parameters)
+        for column, values in zip(self._offsets, columns[4:], strict=True):
             column.extend(values)
         return True
 
     def _add_names(self, names: Sequence[str], parameters: Sequence[str | None]) -> None:
         first = len(self.names)
-        self.names.extend([name if name[:1] != "\\" else canonical(name) for name in names])
-        if any(parameters):
+        self.names.extend(kept(names))
+        if parameters:
             overrides = enumerate(parameters, first)
             self.parameters.update((number, text) for number, text in overrides if text)
 
@@ -254,16 +263,25 @@ def _joined(parts: list[Ids]) -> Ids:
     return np.concatenate(parts) if parts else np.zeros(0, np.int32)
 
 
+def _ids(table: defaultdict[str, int], texts: Sequence[str]) -> Ids:
+    return np.fromiter(map(table.__getitem__, texts), np.int32, len(texts))
+
+
 def _row(match: re.Match[str]) -> Row:
-    cell, parameters, name, named, terms = match.group(
-        "cell", "parameters", "instance", "named", "terms"
-    )
+    """Return the instance of a statement, in whichever of the scanner's ways it is written."""
+    odd = ODD_INSTANCE.match(match.string, match.start(ODD)) if match[ODD] else None
+    if odd is None:
+        cell, name, body = match.group(1, 2, 3)
+        return Row(cell, name, body, None, match.start(), match.start(1), match.end())
+    cell, parameters, instance, named, terms = odd.groups()
     body = named if named is not None else by_position(_terms(terms))
-    return Row(cell, name or "", body, parameters, match.start(), match.start("cell"), match.end())
+    return Row(cell, instance or "", body, parameters, match.start(), match.start(ODD), match.end())
 
 
 def by_position(terms: Sequence[str]) -> str:
     """Return the body of an instance that connects ``terms`` by position."""
+    if not terms:
+        return NOTHING
     return ",".join([f".#{place}({term})" for place, term in enumerate(terms)]) + ")"
 
 

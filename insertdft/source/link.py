@@ -21,10 +21,10 @@ from insertdft.text import Span
 class Names:
     """Kept names with ids, and the ids of the raw spellings met while reading."""
 
-    def __init__(self, raw: Sequence[str | None]) -> None:
+    def __init__(self, raw: Sequence[str]) -> None:
         """Give every kept spelling one id, in order of first use."""
         self._id: dict[str, int] = {}
-        kept = [self.id(canonical(name)) if name else OPEN for name in raw]
+        kept = [self.id(canonical(name)) for name in raw]
         self.of_raw: Ids = np.array(kept, np.int32)
 
     def id(self, name: str) -> int:
@@ -49,7 +49,7 @@ class Linking(NamedTuple):
 
     cells: Names
     pins: Names
-    raw_pins: tuple[str | None, ...]
+    raw_pins: tuple[str, ...]
     ports: Mapping[str, tuple[Port, ...]]
     complaints: Complaints
 
@@ -58,7 +58,7 @@ def prepare_linking(drafts: Sequence[Draft], tables: Tables, complaints: Complai
     """Return the shared names and every module's ports."""
     cells = Names(tuple(tables.cells))
     ports = {draft.name: _ports(draft, complaints) for draft in drafts}
-    return Linking(cells, Names(tuple(tables.pins)), tuple(tables.pins), ports, complaints)
+    return Linking(cells, Names(tuple(tables.pins.ids)), tuple(tables.pins.ids), ports, complaints)
 
 
 def _ports(draft: Draft, complaints: Complaints) -> tuple[Port, ...]:
@@ -160,6 +160,8 @@ def _check_cells(draft: Draft, linking: Linking) -> None:
                 word_at(draft.prepared.source, first),
                 "only cells, modules and gate primitives can be instanced",
             )
+    if "" not in draft.names and KEYWORDS.isdisjoint(draft.names):
+        return
     for number, name in enumerate(draft.names):
         if name in KEYWORDS or (not name and raw[int(cells[number])] not in PRIMITIVES):
             linking.complaints.error(
@@ -222,8 +224,7 @@ class _Expansion:
 
     def add(self, row: int, *, is_to_module: bool) -> int:
         """Add the bits of one connection and return how many there are."""
-        pin = self._linking.raw_pins[int(self._raw_pins[row])] or ""
-        name = canonical(pin)
+        name = canonical(self._linking.raw_pins[int(self._raw_pins[row])])
         if is_to_module:
             return self._to_module(row, name)
         bits = self._resolved.bits(int(self._numbers[row]))

@@ -7,18 +7,21 @@ expressions use (``n1``, ``bus[3]``, ``\esc[3] `` with its closing blank). Whate
 looked at once, when the module ends.
 """
 
+import re
 from bisect import bisect_right
 from collections import defaultdict, deque
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
-from itertools import count
+from itertools import compress, count
+from typing import Final
 
 import numpy as np
 
 from insertdft.netlist import CONSTANT_NAMES, Ids, Vector
-from insertdft.netlist.names import KEYWORDS, canonical
+from insertdft.netlist.names import canonical
 
-UNRESOLVED = -2
+#: In place of a net: the number stands for no declared bit.
+UNRESOLVED: Final = -2
 
 
 @dataclass(slots=True)
@@ -37,6 +40,16 @@ class _Run:
     number: int
     net: int
     length: int
+
+
+_PLAIN_ESCAPED: Final = re.compile(r"\\[A-Za-z_][\w$]*+;", re.ASCII)
+
+
+def kept(names: Sequence[str]) -> Sequence[str]:
+    """Return the kept spelling of many names, as ``canonical`` does for one."""
+    if _PLAIN_ESCAPED.search(";".join(names) + ";"):
+        return list(map(canonical, names))
+    return names
 
 
 def spelling(name: str) -> str:
@@ -73,27 +86,21 @@ class Nets:
             names: As written, escaped ones without closing blank.
 
         Returns:
-            Places in ``names`` of those that were met before, come twice or are keywords, and are
-            not declared.
+            Places in ``names`` of those that were met before, come twice, and are not declared.
         """
-        kept = [name if name[0] != "\\" else canonical(name) for name in names]
-        keys = [name if name[0] != "\\" else name + " " for name in kept]
-        number = self.number
-        if (
-            len(set(keys)) == len(keys)
-            and not any(map(number.__contains__, keys))
-            and KEYWORDS.isdisjoint(keys)
-        ):
-            self._add_run(keys, kept)
+        kept_names = kept(names)
+        keys = [name + " " if name[0] == "\\" else name for name in kept_names]
+        first = len(self.number)
+        numbers = np.fromiter(map(self.number.__getitem__, keys), np.int32, len(keys))
+        fresh = len(self.number) - first
+        if fresh == len(keys):
+            self._note_run(first, kept_names)
             return []
-        fresh: dict[str, str] = {}
-        odd: list[int] = []
-        for place, key in enumerate(keys):
-            if key in number or key in fresh or key in KEYWORDS:
-                odd.append(place)
-            else:
-                fresh[key] = kept[place]
-        self._add_run(list(fresh), list(fresh.values()))
+        # New names get ascending numbers; what gets no higher one than before it is not new.
+        highest = np.maximum.accumulate(np.concatenate(([first - 1], numbers[:-1])))
+        is_fresh = numbers > highest
+        self._note_run(first, list(compress(kept_names, is_fresh.tolist())))
+        odd: list[int] = np.flatnonzero(~is_fresh).tolist()
         return odd
 
     def is_declared(self, name: str) -> bool:
@@ -133,9 +140,14 @@ class Nets:
         return first
 
     def _add_run(self, keys: Sequence[str], names: Sequence[str]) -> int:
-        first = len(self.names)
-        self._runs.append(_Run(len(self.number), first, len(keys)))
+        first = len(self.number)
         deque(map(self.number.__getitem__, keys), 0)
+        return self._note_run(first, names)
+
+    def _note_run(self, number: int, names: Sequence[str]) -> int:
+        """Make nets of the numbers from ``number`` on; return the first."""
+        first = len(self.names)
+        self._runs.append(_Run(number, first, len(names)))
         self.names.extend(names)
         return first
 
@@ -152,9 +164,5 @@ class Nets:
         """Return the text of every number that is no declared bit, in ascending order."""
         if not (nets == UNRESOLVED).any():
             return {}
-        flags = (nets == UNRESOLVED).tolist()
-        return {
-            number: text
-            for (text, number), odd in zip(self.number.items(), flags, strict=True)
-            if odd
-        }
+        texts = compress(self.number, (nets == UNRESOLVED).tolist())
+        return dict(zip(np.flatnonzero(nets == UNRESOLVED).tolist(), texts, strict=True))

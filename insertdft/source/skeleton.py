@@ -16,6 +16,7 @@ from insertdft.source.complaints import Complaints, SyntaxStopError, word_at
 from insertdft.source.declarations import NET_KINDS, Declared, declare
 from insertdft.source.draft import Draft, Row, by_position
 from insertdft.source.grammar import Node, NotVerilogError, parse
+from insertdft.source.patterns import DECLARATION, DECLARED
 from insertdft.source.preprocess import Macros, Prepared
 from insertdft.source.spelling import EMPTY, NotStructuralError, integer, spell
 from insertdft.source.tokens import NAME, Token, matching, split_commas, tokens
@@ -127,10 +128,13 @@ class Skeleton:
 
     def declare_plain(self, draft: Draft, match: re.Match[str]) -> None:
         """Enter a declaration that the scanner's pattern has answered."""
-        kind, msb, lsb = match.group("kind", "msb", "lsb")
+        plain = DECLARATION.match(self._code, match.start(DECLARED))
+        if plain is None:
+            raise RuntimeError("the patterns of a declaration differ")
+        kind, msb, lsb = plain.group("kind", "msb", "lsb")
         limits = (int(msb), int(lsb)) if msb is not None else None
         is_port = kind in _DIRECTIONS
-        for name in _WORD.finditer(self._code, *match.span("names")):
+        for name in _WORD.finditer(self._code, *plain.span("names")):
             declared = Declared(
                 canonical(name[0]),
                 name.start(),

@@ -7,43 +7,34 @@ comes out as a whole statement and goes to ``skeleton.py``.
 """
 
 import re
+from collections import defaultdict
 from collections.abc import Iterator
+from itertools import islice
+from operator import attrgetter
 from typing import Final
 
 from insertdft.source.behaviour import BEHAVIOUR, end_of_block
 from insertdft.source.complaints import Complaints, SyntaxStopError, word_at
-from insertdft.source.draft import BATCH, Draft, Tables
+from insertdft.source.draft import Draft, Tables
+from insertdft.source.patterns import (
+    ASSIGN,
+    ASSIGNED,
+    DECLARED,
+    END,
+    NAMED,
+    ODD,
+    REST,
+    STATEMENT,
+    WIRES,
+)
 from insertdft.source.preprocess import Macros, Prepared
 from insertdft.source.skeleton import Skeleton
-from insertdft.source.tokens import ATTRIBUTE, COMMENT, GAP, NAME, STRING
 from insertdft.text import Span
 
-_PARAMETERS: Final = rf'\((?:[^()"\\/`;]++|{STRING}|\((?:[^()"\\/`;]++|{STRING})*+\))*+\)'
-#: Whether the body is what it should be is checked when it is taken apart, in ``draft.py``.
-_NAMED: Final = r"\.(?:[^;\"/\\*`]++|\\\S++)*+"
-_TERMS: Final = r"(?:[\w$\[\]:',\s]++|\\\S++)*+"
-_NAMES: Final = rf"{NAME}\s*+(?:,\s*+{NAME}\s*+)*+"
-_RANGE: Final = r"\[\s*+(?P<msb>-?\d++)\s*+:\s*+(?P<lsb>-?\d++)\s*+\]\s*+"
-_SIDE: Final = r"(?:[\w$\[\]:',{}\s]++|\\\S++)*+"
-#: Any text up to a semicolon that stands in no string, comment, attribute or escaped name.
-_ANY: Final = (
-    rf'(?:[^;"/\\(]++|{STRING}|{COMMENT}|{ATTRIBUTE}|\\\S++|/(?![/*])|\((?!\*)|\(\*(?=\s*+\)))*+'
-)
+_KIND: Final = attrgetter("lastindex")
 
-STATEMENT: Final = re.compile(
-    rf"""{GAP}(?:
-    (?!(?:module|macromodule|function|task|primitive)\b)
-    (?P<cell>{NAME})(?:\s*+(?P<parameters>\#\s*+{_PARAMETERS}))?+(?:\s*+(?P<instance>{NAME}))?+
-        \s*+\(\s*+(?:(?P<named>{_NAMED});|(?P<terms>{_TERMS})\)\s*+;)
-    |wire\s++(?P<wires>{_NAMES});
-    |(?P<kind>input|output|inout|wire)\b\s*+(?:{_RANGE})?+(?P<names>{_NAMES});
-    |assign\b(?P<left>{_SIDE})=(?P<right>{_SIDE});
-    |(?P<endmodule>endmodule)\b
-    |(?P<any>{_ANY});
-    )""",
-    re.ASCII | re.VERBOSE,
-)
-_REST: Final = re.compile(GAP)
+#: Statements read at once.
+BATCH: Final = 4096
 
 
 def read_modules(
@@ -86,39 +77,68 @@ class _Reading:
         self._open = None
 
     def _scan(self, start: int) -> int | None:
-        """Read statements from ``start`` on; return where to go on, or None at the end.
-
-        This is the loop that a million instances run through.
-        """
+        """Read statements from ``start`` on; return where to go on, or None at the end."""
         at = start
-        draft = self._open
-        for match in _statements(self._code, start):
-            kind = match.lastgroup
-            if draft is None or kind in ("endmodule", "any"):
-                resume = self._general(match, draft)
-                draft = self._open
-                if resume is not None:
-                    return resume
-            elif kind in ("named", "terms"):
-                draft.pending.append(match)
-                if len(draft.pending) >= BATCH:
-                    draft.flush()
-            elif kind == "wires":
-                draft.wires.append(match.span("wires"))
-            elif kind == "names":
-                self._skeleton.declare_plain(draft, match)
-            else:
-                draft.assign(match["left"], match["right"], match.start("left"))
-            at = match.end()
+        statements = _statements(self._code, start)
+        while chunk := list(islice(statements, BATCH)):
+            resume = self._read(chunk)
+            if resume is not None:
+                return resume
+            at = chunk[-1].end()
         self._check_end(at)
         return None
 
-    def _general(self, match: re.Match[str], draft: Draft | None) -> int | None:
+    def _read(self, chunk: list[re.Match[str]]) -> int | None:
+        """Read some statements; return where to go on, if not behind the last."""
+        kinds = list(map(_KIND, chunk))
+        if kinds.count(NAMED) == len(chunk) and self._open is not None:
+            self._open.add_plain(chunk)
+            return None
+        done = 0
+        for place in [place for place, kind in enumerate(kinds) if kind >= END]:
+            self._read_bulk(chunk[done:place], kinds[done:place])
+            resume = self._read_one(chunk[place])
+            if resume is not None:
+                return resume
+            done = place + 1
+        self._read_bulk(chunk[done:], kinds[done:])
+        return None
+
+    def _read_bulk(self, chunk: list[re.Match[str]], kinds: list[int]) -> None:
+        """Read statements that patterns answer, all of one module.
+
+        Declarations come first, though reading does not depend on it: names that are met before
+        their declaration cost more.
+        """
+        if not chunk:
+            return
+        draft = self._open
+        if draft is None:
+            raise self._outside(word_at(self._prepared.source, _start(chunk[0])))
+        if kinds.count(NAMED) == len(chunk):
+            draft.add_plain(chunk)
+            return
+        of_kind = defaultdict[int, list[re.Match[str]]](list)
+        for match, kind in zip(chunk, kinds, strict=True):
+            of_kind[ODD if kind == NAMED else kind].append(match)
+        if of_kind[WIRES]:
+            draft.add_wires(of_kind[WIRES])
+        for match in of_kind[DECLARED]:
+            self._skeleton.declare_plain(draft, match)
+        if of_kind[ODD]:
+            draft.add_mixed(of_kind[ODD])
+        for match in of_kind[ASSIGNED]:
+            sides = ASSIGN.match(self._code, match.start(ASSIGNED))
+            if sides:
+                draft.assign(sides[1], sides[2], sides.start())
+
+    def _read_one(self, match: re.Match[str]) -> int | None:
         """Read a statement that changes the state or that the pattern does not answer.
 
         Returns:
             Where to go on, if not behind the statement.
         """
+        draft = self._open
         start, end = _start(match), match.end()
         word = word_at(self._prepared.source, start)
         if word.text in BEHAVIOUR:
@@ -127,10 +147,10 @@ class _Reading:
         if word.text in ("module", "macromodule"):
             self._open_module(start, end)
         elif draft is None:
-            self._outside(word)
+            if word.text != ";":
+                raise self._outside(word)
         elif word.text == "endmodule":
-            draft.flush()
-            draft.body_end = start
+            draft.close(start)
             self._open = None
         elif word.text != ";":
             self._skeleton.read(draft, match.start(), start, end)
@@ -153,21 +173,19 @@ class _Reading:
             "the file may have been cut off; write it again",
         )
 
-    def _outside(self, word: Span) -> None:
-        if word.text == ";":
-            return
+    def _outside(self, word: Span) -> SyntaxStopError:
         self._complaints.error(
             "netlist-syntax",
             f"`{word.text}` stands outside of any module",
             word,
             "a netlist holds modules and nothing between them",
         )
-        raise SyntaxStopError
+        return SyntaxStopError()
 
     def _check_end(self, at: int) -> None:
         """Complain unless the text ends here, between two modules."""
         code, source = self._code, self._prepared.source
-        gap = _REST.match(code, at)
+        gap = REST.match(code, at)
         rest = gap.end() if gap else at
         if rest < len(code):
             opening = {"/*": "comment", "(*": "attribute"}.get(code[rest : rest + 2])
@@ -190,7 +208,7 @@ def _statements(code: str, start: int) -> Iterator[re.Match[str]]:
 
 def _start(match: re.Match[str]) -> int:
     """Return the offset of the first word of a statement."""
-    gap = _REST.match(match.string, match.start())
+    gap = REST.match(match.string, match.start())
     return gap.end() if gap else match.start()
 
 

@@ -1,8 +1,9 @@
 """Which module is the top, and that no module contains itself."""
 
 from collections.abc import Mapping, Sequence
+from graphlib import CycleError, TopologicalSorter
+from itertools import pairwise
 
-import networkx as nx
 import numpy as np
 
 from insertdft.diagnostics import DesignError, Diagnostic, Severity, error, nearest
@@ -54,21 +55,21 @@ def _children(
 def _refuse_cycles(
     modules: Mapping[str, Module], children: Mapping[str, Mapping[str, int]]
 ) -> None:
-    graph: nx.DiGraph[str] = nx.DiGraph()
-    graph.add_nodes_from(children)
-    graph.add_edges_from((name, child) for name, inner in children.items() for child in inner)
     try:
-        cycle = nx.find_cycle(graph)
-    except nx.NetworkXNoCycle:
+        TopologicalSorter(children).prepare()
         return
-    places = [modules[edge[0]].span(children[edge[0]][edge[1]]) for edge in cycle]
-    path = " -> ".join(f"`{edge[0]}`" for edge in [*cycle, cycle[0]])
+    except CycleError as cause:
+        # Its list runs from inside to outside and ends with the module that it starts with.
+        cycle: list[str] = cause.args[1][::-1]
+    steps = pairwise(cycle)
+    places = [modules[name].span(children[name][child]) for name, child in steps]
+    path = " -> ".join(f"`{name}`" for name in cycle)
     raise DesignError(
         [
             Diagnostic(
                 "module-cycle",
                 Severity.ERROR,
-                f"module `{cycle[0][0]}` contains itself: {path}",
+                f"module `{cycle[0]}` contains itself: {path}",
                 places[0],
                 hint="take one of the instances out",
                 also=tuple((span, "and on from here") for span in places[1:]),
