@@ -121,7 +121,7 @@ def _shift_outputs(
         for inverted in (False, True)
         if (function := cell.pins[name].function) is not None
         and all(
-            _shown(function, nodes) == inputs[claim.scan_in] ^ inverted for inputs, nodes in runs
+            _shown(function, nodes) == inputs[claim.scan_in] ^ inverted for inputs, nodes, _ in runs
         )
     ]
     return tuple(sorted(found, key=lambda item: not item.test_only))
@@ -162,8 +162,9 @@ def _captures(
     if mission.clock_also is not None:
         pulses += support(mission.clock_also)
     pulses = [name for name in pulses if name in rest]
-    for inputs, nodes in _runs(model, pulses, rest, held):
-        values = {name: value for name, value in inputs.items() if name in support(mission.data)}
+    for inputs, nodes, before in _runs(model, pulses, rest, held):
+        state = _mission_state(cell, before)
+        values = {**inputs, mission.state: state, mission.state_inverted: 1 - state}
         state = evaluate(mission.data, values, 1)
         for name in test.functions:
             inverse, shows = _mission_inverse(cell, name), cell.pins[name].function
@@ -176,10 +177,20 @@ def _captures(
     return True
 
 
+def _mission_state(cell: Cell, nodes: Mapping[str, Value]) -> int:
+    """Return the mission state that the outputs show (0 where none shows it)."""
+    for pin in cell.outputs():
+        inverse = _mission_inverse(cell, pin.name)
+        shown = _shown(pin.function, nodes) if pin.function is not None else None
+        if inverse is not None and shown is not None:
+            return shown ^ inverse
+    return 0
+
+
 def _runs(
     model: TableModel, clocks: Sequence[str], rest: Mapping[str, int], held: Mapping[str, int]
-) -> list[tuple[dict[str, int], dict[str, Value]]]:
-    """Pulse ``clocks`` one after another for all data and states: (inputs, nodes after).
+) -> list[tuple[dict[str, int], dict[str, Value], dict[str, Value]]]:
+    """Pulse ``clocks`` one after another for all data and states: (inputs, nodes after, before).
 
     The nodes are those right after the last leading edge.
     """
@@ -188,13 +199,13 @@ def _runs(
     for data in patterns(free):
         for before in patterns(model.nodes):
             idle = {**held, **data, **rest}
-            nodes: dict[str, Value] = model.settle(idle, idle, before)
-            after = nodes
+            start: dict[str, Value] = model.settle(idle, idle, before)
+            after = nodes = start
             for clock in clocks:
                 on = {**idle, clock: 1 - idle[clock]}
                 after = model.settle(idle, on, nodes)
                 nodes = model.settle(on, idle, after)
-            found.append((idle, after))
+            found.append((idle, after, start))
     return found
 
 
