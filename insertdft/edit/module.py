@@ -199,9 +199,21 @@ class _Editor:
             listing = Splice(header.end - 1, header.end - 1, f" (\n  {joined}\n)", "new ports")
         else:
             lead = "" if header.list_empty else ",\n  "
-            listing = Splice(header.list_end, header.list_end, lead + joined, "new ports")
+            at = header.list_end if header.list_empty else self._after_last_port(header.list_end)
+            listing = Splice(at, at, lead + joined, "new ports")
         text = "".join(f"\n  {line}" for line in declared)
         return [listing, Splice(header.end, header.end, text, "declarations")][: 1 + bool(text)]
+
+    def _after_last_port(self, list_end: int) -> int:
+        """Return where the port list can be gone on with: right behind its last port, if plain."""
+        text = self._module.source.text
+        at = list_end
+        while text[at - 1].isspace():
+            at -= 1
+        line = text[text.rfind("\n", 0, at) + 1 : at]
+        if "//" in line or "`" in line:
+            return list_end
+        return at + 1 if line.rpartition(" ")[2].startswith("\\") else at
 
     def _directions(self) -> Mapping[str, str]:
         outputs = {segment.scan_out for segment in self._mine.segments}
