@@ -5,12 +5,11 @@ starts and ends. What an edit needs beyond that is found here, in a few microsec
 """
 
 import re
-from dataclasses import dataclass
 from typing import Final, NamedTuple
 
 from insertdft.netlist import Module
 from insertdft.netlist.names import canonical
-from insertdft.source.tokens import ATTRIBUTE, COMMENT, GAP, NAME, STRING
+from insertdft.source.tokens import ATTRIBUTE, COMMENT, GAP, NAME, STRING, TOKEN
 
 
 class Connection(NamedTuple):
@@ -33,13 +32,12 @@ class Connection(NamedTuple):
     expression: str
 
 
-@dataclass(frozen=True, slots=True)
-class InstanceText:
+class InstanceText(NamedTuple):
     """The parts of one instance in the text of its module's source; all numbers are offsets.
 
     Attributes:
         cell: Start and end of the cell name, which all instances of the statement share.
-        parameters: Start and end of ``#(...)``, shared as well; None if there are none.
+        parameters: Start and end of ``#(...)``, shared as well (of a gate, its delay), or None.
         name: Start and end of the instance name; None for a nameless gate.
         index: Place within its statement, from 0.
         statement_size: How many instances the statement has.
@@ -70,15 +68,14 @@ class InstanceText:
 def locate(module: Module, instance: int) -> InstanceText:
     """Return the places of the parts of one instance."""
     starts = module.instance_start
-    start = starts[instance]
-    first = instance
-    while first > 0 and starts[first - 1] == start:
+    start = starts.item(instance)
+    first, after = instance, instance + 1
+    while first > 0 and starts.item(first - 1) == start:
         first -= 1
-    last = instance
-    while last + 1 < len(starts) and starts[last + 1] == start:
-        last += 1
+    while after < len(starts) and starts.item(after) == start:
+        after += 1
     code, source = module.code or module.source.text, module.source.text
-    return _locate(code, source, int(start), instance - first, last - first + 1)
+    return _locate(code, source, start, instance - first, after - first)
 
 
 def attributes(module: Module, instance: int) -> dict[str, str]:
@@ -103,37 +100,34 @@ _GAP_PART: Final = re.compile(rf"\s++|{COMMENT}|(?P<attribute>{ATTRIBUTE})", re.
 _ATTRIBUTE_ITEM: Final = re.compile(rf"[\s,]*+({NAME})(?:\s*+=\s*+({STRING}|[^,\"]++))?+", re.ASCII)
 
 
-def _nested(depth: int) -> str:
-    """Return a pattern of text with balanced brackets."""
-    inner = rf'[^()\[\]{{}},;\\/"]++|\\\S++|{STRING}|{COMMENT}|/'
-    for _ in range(depth):
-        inner = (
-            rf'[^()\[\]{{}},;\\/"]++|\\\S++|{STRING}|{COMMENT}|/'
-            rf"|\((?:{inner}|,)*+\)|\[(?:{inner}|,)*+\]|\{{(?:{inner}|,)*+\}}"
-        )
-    return rf"(?:{inner})*+"
-
-
-_BALANCED: Final = _nested(3)
+_STRENGTH: Final = r"(?:supply|strong|pull|weak|highz)[01]\b"
+#: What can stand between a cell name and the instance name.
 _HEAD: Final = re.compile(
-    rf"(`?{NAME}){GAP}"
-    rf"(?P<strength>\((?:supply|strong|pull|weak|highz)[01]\b[^()]*+\){GAP})?+"
-    rf"(?P<parameters>\#\s*+(?:\((?:{_BALANCED},?+)*+\)|[\w.$`']++))?+",
-    re.ASCII,
+    rf"(`?{NAME}){GAP}(?:(?P<parameters>\#)|(?P<strength>\(\s*+{_STRENGTH}))?+"
 )
 _OPENING: Final = re.compile(rf"{GAP}(?P<comma>,)?+{GAP}(?P<name>`?{NAME})?+{GAP}\(", re.ASCII)
-_NAMED: Final = re.compile(
-    rf"{GAP},?+{GAP}(\.)\s*+({NAME}){GAP}\(\s*+((?:[\w\[\]$']++|{_BALANCED}))(\))", re.ASCII
+#: A connection by name to a name, one bit, a constant or nothing: nearly all are of this kind.
+_PLAIN: Final = re.compile(
+    rf"""\s*+,?+\s*+(\.)\s*+({NAME})\s*+\(
+    \s*+((?:[\w$':]++(?:\[[\d:]++\])?+|\\\S++(?:\s++\[[\d:]++\])?+)?+)\s*+\)""",
+    re.ASCII | re.VERBOSE,
 )
-_TERM: Final = re.compile(rf"{GAP}({_BALANCED})(,?+)", re.ASCII)
+_NAMED: Final = re.compile(rf"{GAP},?+{GAP}(\.)\s*+({NAME}){GAP}\({GAP}", re.ASCII)
+_DELAY: Final = re.compile(rf"{GAP}(?:\d[\w.']*+|`?{NAME})", re.ASCII)
+_PAREN: Final = re.compile(rf"{GAP}\(", re.ASCII)
 _CLOSING: Final = re.compile(rf"{GAP}\)", re.ASCII)
+_SKIP: Final = re.compile(GAP)
+#: Whatever matters for where an expression ends.
+_MARK: Final = re.compile(rf"{COMMENT}|{STRING}|\\\S++|[()\[\]{{}},]", re.ASCII)
 
 
 def _locate(code: str, source: str, start: int, index: int, size: int) -> InstanceText:
     head = _HEAD.match(code, start)
     if head is None:
         raise RuntimeError(f"no instance at offset {start}")
-    at = head.end()
+    at, parameters = head.end(1), None
+    if head.lastindex != 1:
+        at, parameters = _behind_parameters(code, head)
     for _ in range(index):
         at = _connections(code, _opening(code, at).end())[1] + 1
     opening = _opening(code, at)
@@ -141,7 +135,7 @@ def _locate(code: str, source: str, start: int, index: int, size: int) -> Instan
     insert_at = _insert_at(code, source, connections, list_end)
     return InstanceText(
         cell=head.span(1),
-        parameters=head.span("parameters") if head["parameters"] else None,
+        parameters=parameters,
         name=opening.span("name") if opening["name"] else None,
         index=index,
         statement_size=size,
@@ -162,23 +156,77 @@ def _opening(code: str, at: int) -> re.Match[str]:
     return opening
 
 
+def _behind_parameters(code: str, head: re.Match[str]) -> tuple[int, tuple[int, int] | None]:
+    """Return the offset behind strength, delay or parameters, and the span of the latter."""
+    at = head.start("strength")
+    if at >= 0:
+        at = _SKIP.match(code, _behind_bracket(code, at + 1)).end()  # type: ignore[union-attr]
+        if code[at] != "#":
+            return at, None
+    else:
+        at = head.start("parameters")
+    opening = _PAREN.match(code, at + 1)
+    delay = _DELAY.match(code, at + 1)
+    if opening:
+        end = _behind_bracket(code, opening.end())
+    elif delay:
+        end = delay.end()
+    else:
+        raise RuntimeError(f"no parameters at offset {at}")
+    return end, (at, end)
+
+
+def _behind_bracket(code: str, at: int) -> int:
+    """Return the offset behind the bracket that closes the one before ``at``."""
+    while code[at - 1] != ")" or at == 0:
+        at = _expression_end(code, at) + 1
+    return at
+
+
+def _expression_end(code: str, at: int) -> int:
+    """Return the offset of the comma or bracket that ends the expression from ``at`` on."""
+    depth = 0
+    for mark in _MARK.finditer(code, at):
+        text = mark[0]
+        if text in ")]}" and depth == 0:
+            return mark.start()
+        if text == "," and depth == 0:
+            return mark.start()
+        depth += (text in "([{") - (text in ")]}")
+    raise RuntimeError(f"no end of the expression at offset {at}")
+
+
 def _connections(code: str, at: int) -> tuple[tuple[Connection, ...], int]:
     """Return the connections from ``at`` on, and the offset of the ``)`` behind them."""
     found: list[Connection] = []
-    match = _NAMED.match(code, at)
-    if match is None:
-        return _by_position(code, at)
-    while match is not None:
-        text = match[3].rstrip()
-        first = match.start(3)
-        found.append(
-            Connection(
-                canonical(match[2]), match.start(1), match.end(), first, first + len(text), text
-            )
-        )
-        at = match.end()
+    while True:
+        match = _PLAIN.match(code, at)
+        if match is not None:
+            name, text = match.group(2, 3)
+            pin = canonical(name) if name[0] == "\\" else name
+            first, end = match.span(3)
+            found.append(Connection(pin, match.start(1), match.end(), first, end, text))
+            at = match.end()
+            continue
         match = _NAMED.match(code, at)
-    return tuple(found), _closing(code, at)
+        if match is None:
+            break
+        end = _expression_end(code, match.end())
+        first, last = _trimmed(code, match.end(), end)
+        text = code[first:last]
+        pin = canonical(match[2])
+        found.append(Connection(pin, match.start(1), end + 1, first, last, text))
+        at = end + 1
+    return (tuple(found), _closing(code, at)) if found else _by_position(code, at)
+
+
+def _trimmed(code: str, start: int, end: int) -> tuple[int, int]:
+    """Return the span of the expression in a stretch of text, without blanks and comments."""
+    last = start
+    for word in TOKEN.finditer(code, start, end):
+        if word.lastgroup != "gap":
+            last = word.end()
+    return start, last
 
 
 def _by_position(code: str, at: int) -> tuple[tuple[Connection, ...], int]:
@@ -186,14 +234,13 @@ def _by_position(code: str, at: int) -> tuple[tuple[Connection, ...], int]:
     closing = _CLOSING.match(code, at)
     if closing:
         return (), closing.end() - 1
-    while term := _TERM.match(code, at):
-        text = term[1].rstrip()
-        first, end = term.start(1), term.start(1) + len(text)
-        found.append(Connection(f"#{len(found)}", first, end, first, end, text))
-        at = term.end()
-        if not term[2]:
-            break
-    return tuple(found), _closing(code, at)
+    while not found or code[at - 1] == ",":
+        start = _SKIP.match(code, at).end()  # type: ignore[union-attr]
+        end = _expression_end(code, start)
+        first, last = _trimmed(code, start, end)
+        found.append(Connection(f"#{len(found)}", first, last, first, last, code[first:last]))
+        at = end + 1
+    return tuple(found), at - 1
 
 
 def _closing(code: str, at: int) -> int:
@@ -207,9 +254,9 @@ def _insert_at(code: str, source: str, connections: tuple[Connection, ...], list
     if not connections:
         return list_end
     end = connections[-1].end
-    rest = source[end:list_end]
-    if rest != code[end:list_end]:
+    if code is not source and source[end:list_end] != code[end:list_end]:
         return list_end  # a directive stands there: what follows it must not depend on it
-    if connections[-1].expression[:1] == "\\" and connections[-1].pin[0] == "#":
-        return end + 1  # behind the blank that closes the name
+    if connections[-1].pin[0] == "#" and connections[-1].expression.rpartition("\\")[1]:
+        # The last name may be an escaped one, whose closing blank stands outside of it.
+        return end + 1 if source[end].isspace() else end
     return end

@@ -8,6 +8,7 @@ in a list of connections, ports under another name.
 """
 
 import re
+from collections.abc import Iterator
 from typing import Final, NoReturn
 
 from insertdft.netlist import PRIMITIVES, Header
@@ -271,11 +272,11 @@ class Skeleton:
         elif len(words) > 2 and words[1].text == "#":
             at = matching(words, 2) + 1 if words[2].text == "(" else 3
             parameters = self._code[words[1].start : words[at - 1].end]
-        tree = self._parse([words[0], *_fill_empty(words[at:])])
-        if type(tree).__name__ != "InstanceList":
-            self._no_verilog(words[0].start)
+        # A gate may do without a name, also in a row with others that have one; the grammar wants
+        # all or none.
+        parts = split_commas(words[at:-1]) if is_gate else [words[at:-1]]
         rows: list[Row] = []
-        for instance in tree.instances:
+        for instance in self._instances(words, parts):
             if instance.array is not None:
                 self._refuse_at(instance.lineno, f"`{instance.name}` is an array of instances")
             name = instance.name
@@ -285,6 +286,13 @@ class Skeleton:
                 Row(words[0].text, name, self._body(instance), parameters, before, start, end)
             )
         return rows
+
+    def _instances(self, words: list[Token], parts: list[list[Token]]) -> Iterator[Node]:
+        for part in parts:
+            tree = self._parse([words[0], *_fill_empty(part), words[-1]])
+            if type(tree).__name__ != "InstanceList":
+                self._no_verilog(words[0].start)
+            yield from tree.instances
 
     def _body(self, instance: Node) -> str:
         ports = instance.portlist

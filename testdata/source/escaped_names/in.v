@@ -1,0 +1,22 @@
+module \top.of-all (\a[0] , \b , y, \bus.x );
+  input \a[0] ;
+  input b;
+  input [2:0] \bus.x ;
+  output y;
+  wire \n;1 ;
+  wire \n)2 ;
+  wire \n(3 , \n,4 , \n"5 , \n//6 , \n/*7 , \n`8 , \n#9 , \n\10 ;
+  wire \wire ;
+  wire [1:0] \mem[3] ;
+  INV \u1.x[2] (.A(\a[0] ), .Y(\n;1 ));
+  INV \u2 (.A (\b ), .Y( \n)2 ) );
+  INV u3(.A(\bus.x [1]),.Y(\n(3 ));
+  INV u4(.A(\mem[3] [0]),.Y(\n,4 ));
+  INV u5(.A(\mem[3]  [1]),.Y(\n"5 ));
+  \INV u6 (.\A (\n//6 ), .Y(\n/*7 ));
+  \IN-V u7 (.\A[0] (\n`8 ), .\Y  (\n#9 ));
+  INV u8 (.A(\n\10 ), .Y(y));
+  INV \module (.A(\wire ), .Y(\q));q ));
+  INV \u);9 (.A(b), .Y(\p);p ));
+  DEEP u9 (.A(\bus.x ), .B(\mem[3] ), .C({\n;1 ,\n)2 }));
+endmodule

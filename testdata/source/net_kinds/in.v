@@ -1,0 +1,22 @@
+module top (a, y);
+  input a;
+  output tri y;
+  supply0 gnd;
+  supply1 vdd, vddio;
+  supply0 [1:0] low;
+  tri t1;
+  tri0 t2;
+  tri1 [3:0] t3;
+  wand w1, w2;
+  wor w3;
+  triand w4;
+  trior w5;
+  trireg (small) #(0,0,50) w6;
+  uwire u0;
+  wire vectored [3:0] vec;
+  wire signed [3:0] sig;
+  wire scalared [1:0] sca;
+  TBUF b1 (.A(a), .E(vdd), .Y(y));
+  TBUF b2 (.A(t1), .E(gnd), .Y(y));
+  DEEP d (.A(t3), .B(vec), .C(sig), .D(sca), .E({w1,w2,w3,w4,w5,w6,u0,t2}));
+endmodule
