@@ -15,7 +15,7 @@ from typing import Final, NamedTuple, Protocol
 import numpy as np
 
 from insertdft.netlist import Header, Ids, Offsets
-from insertdft.netlist.names import canonical
+from insertdft.netlist.names import KEYWORDS, canonical
 from insertdft.source.bodies import NOTHING, PinTable, take_apart
 from insertdft.source.nets import Nets, kept
 from insertdft.source.patterns import ODD, ODD_INSTANCE, WIRES
@@ -160,6 +160,9 @@ class Draft:
         """Declare the scalar wires of statements that the scanner's pattern has answered."""
         names = _WIRE.findall(" ".join([match[WIRES] for match in matches]))
         met_before = self.nets.declare_fresh(names)
+        if not KEYWORDS.isdisjoint(names):
+            keywords = [place for place, name in enumerate(names) if name in KEYWORDS]
+            met_before = sorted({*met_before, *keywords})
         if not met_before:
             return
         code = self.prepared.code

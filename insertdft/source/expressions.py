@@ -9,8 +9,8 @@ from collections.abc import Iterator
 from typing import Final, NamedTuple
 
 from insertdft.diagnostics import nearest
-from insertdft.netlist import CONST0, CONST1, CONSTX, CONSTZ
-from insertdft.netlist.names import KEYWORDS, canonical
+from insertdft.netlist import CONST0, CONST1, CONSTX, CONSTZ, FIRST_NET
+from insertdft.netlist.names import KEYWORDS, canonical, split_bit
 from insertdft.source.grammar import NotVerilogError, parse
 from insertdft.source.nets import Nets, spelling
 from insertdft.source.spelling import NotStructuralError, spell
@@ -64,6 +64,8 @@ _SIZED: Final = re.compile(
 )
 _DECIMAL: Final = re.compile(r"\s*+(\d[\d_]*+)\s*+\Z", re.ASCII)
 
+#: How many names a misspelt one is compared with.
+_COMPARED: Final = 5000
 #: Width of a constant that says none (IEEE 1364-2005, 3.5.1: at least 32).
 _UNSIZED: Final = 32
 
@@ -104,7 +106,9 @@ def _through_grammar(text: str, words: list[Token], scope: Scope) -> Bits:
             "give the netlist that synthesis writes; logic belongs into cells",
         ) from None
     if plain.split() == shown.split():
-        raise ExpressionError("netlist-syntax", f"`{shown}` is no expression")
+        raise ExpressionError(
+            "netlist-syntax", f"`{shown}` is no expression", "look for a missing comma or bracket"
+        )
     return bits_of(plain, scope)
 
 
@@ -159,7 +163,9 @@ def _scalar(scope: Scope, name: str) -> int:
             "have synthesis write the value itself",
         )
     if name in KEYWORDS:
-        raise ExpressionError("netlist-syntax", f"`{name}` is a keyword, not a net")
+        raise ExpressionError(
+            "netlist-syntax", f"`{name}` is a keyword, not a net", "rename the net"
+        )
     if scope.net_type == "none":
         raise ExpressionError(
             "name-undeclared",
@@ -174,7 +180,9 @@ def _scalar(scope: Scope, name: str) -> int:
 def _no_vector(scope: Scope, name: str) -> ExpressionError:
     if scope.nets.net_of(spelling(name)) is not None:
         return ExpressionError(
-            "name-undeclared", f"`{name}` has no bits to select, it is declared without a range"
+            "name-undeclared",
+            f"`{name}` has no bits to select, it is declared without a range",
+            "declare it with a range, or use it as a whole",
         )
     return ExpressionError(
         "name-undeclared",
@@ -184,8 +192,8 @@ def _no_vector(scope: Scope, name: str) -> ExpressionError:
 
 
 def _did_you_mean(scope: Scope, name: str) -> str | None:
-    known = [*scope.nets.vectors, *scope.nets.names[4:5000]]
-    return nearest(name, known)
+    bits = scope.nets.names[FIRST_NET:_COMPARED]
+    return nearest(name, [*scope.nets.vectors, *(bit for bit in bits if split_bit(bit)[1] is None)])
 
 
 def _constant(text: str) -> Bits | None:
@@ -209,7 +217,9 @@ def _digits(text: str, digits: str, base: str, width: int) -> tuple[int, ...]:
         bits = [bit for digit in reversed(digits) for bit in _digit(digit, base)]
     except ValueError:
         raise ExpressionError(
-            "netlist-syntax", f"`{text.strip()}` has digits that its base does not have"
+            "netlist-syntax",
+            f"`{text.strip()}` has digits that its base does not have",
+            "correct the constant",
         ) from None
     # The leftmost digit goes on to the left if it is x or z (IEEE 1364-2005, 3.5.1).
     filler = bits[-1] if bits[-1] in (CONSTX, CONSTZ) else CONST0

@@ -160,6 +160,7 @@ def _check_cells(draft: Draft, linking: Linking) -> None:
                 word_at(draft.prepared.source, first),
                 "only cells, modules and gate primitives can be instanced",
             )
+    _check_gates(draft, linking, [number for number, name in enumerate(raw) if name in PRIMITIVES])
     if "" not in draft.names and KEYWORDS.isdisjoint(draft.names):
         return
     for number, name in enumerate(draft.names):
@@ -170,6 +171,22 @@ def _check_cells(draft: Draft, linking: Linking) -> None:
                 word_at(draft.prepared.source, int(draft.starts[number])),
                 "only gate primitives may stand without a name",
             )
+
+
+def _check_gates(draft: Draft, linking: Linking, gates: list[int]) -> None:
+    """Complain about gate primitives connected by name: their pins have none."""
+    if not gates:
+        return
+    counts = np.diff(draft.row_start)
+    by_name = np.array([pin[0] != "#" for pin in linking.raw_pins], bool)
+    wrong = by_name[draft.pins] & np.repeat(np.isin(draft.cells, gates), counts)
+    for instance in np.unique(np.repeat(np.arange(len(counts)), counts)[wrong]).tolist():
+        linking.complaints.error(
+            "netlist-syntax",
+            f"gate `{draft.names[instance]}` is connected by name",
+            word_at(draft.prepared.source, int(draft.starts[instance])),
+            "connect it by position, the output first",
+        )
 
 
 class _Pins(NamedTuple):

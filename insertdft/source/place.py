@@ -39,7 +39,7 @@ class InstanceText(NamedTuple):
         cell: Start and end of the cell name, which all instances of the statement share.
         parameters: Start and end of ``#(...)``, shared as well (of a gate, its delay), or None.
         name: Start and end of the instance name; None for a nameless gate.
-        index: Place within its statement, from 0.
+        place: Place within its statement, from 0.
         statement_size: How many instances the statement has.
         comma: Offset of the comma in front, None for the first of a statement.
         list_start: Offset behind the ``(`` of the connections.
@@ -54,7 +54,7 @@ class InstanceText(NamedTuple):
     cell: tuple[int, int]
     parameters: tuple[int, int] | None
     name: tuple[int, int] | None
-    index: int
+    place: int
     statement_size: int
     comma: int | None
     list_start: int
@@ -121,14 +121,14 @@ _SKIP: Final = re.compile(GAP)
 _MARK: Final = re.compile(rf"{COMMENT}|{STRING}|\\\S++|[()\[\]{{}},]", re.ASCII)
 
 
-def _locate(code: str, source: str, start: int, index: int, size: int) -> InstanceText:
+def _locate(code: str, source: str, start: int, place: int, size: int) -> InstanceText:
     head = _HEAD.match(code, start)
     if head is None:
         raise RuntimeError(f"no instance at offset {start}")
     at, parameters = head.end(1), None
     if head.lastindex != 1:
         at, parameters = _behind_parameters(code, head)
-    for _ in range(index):
+    for _ in range(place):
         at = _connections(code, _opening(code, at).end())[1] + 1
     opening = _opening(code, at)
     connections, list_end = _connections(code, opening.end())
@@ -137,7 +137,7 @@ def _locate(code: str, source: str, start: int, index: int, size: int) -> Instan
         cell=head.span(1),
         parameters=parameters,
         name=opening.span("name") if opening["name"] else None,
-        index=index,
+        place=place,
         statement_size=size,
         comma=opening.start("comma") if opening["comma"] else None,
         list_start=opening.end(),

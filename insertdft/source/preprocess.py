@@ -85,6 +85,9 @@ _ONE_WORD: Final = frozenset(
     nosuppress_faults enable_portfaults disable_portfaults delay_mode_path delay_mode_unit
     delay_mode_zero delay_mode_distributed""".split()
 )
+_PAIRS: Final = "every `ifdef has one `endif, and at most one `else before it"
+_NAME: Final = "write the name of a macro behind it"
+_KIND: Final = "write `wire` or `none`"
 _KINDS: Final = frozenset("wire tri tri0 tri1 wand triand wor trior trireg uwire none".split())
 
 
@@ -129,7 +132,13 @@ class _Reading:
             if match["word"] is not None:
                 at = self._directive(match["word"], match.start(), at)
             elif match[0] == "`":
-                self._wrong("directive-unknown", "a grave accent stands alone", match.start(), at)
+                self._wrong(
+                    "directive-unknown",
+                    "a grave accent stands alone",
+                    match.start(),
+                    at,
+                    "take it out",
+                )
         for branch in self._branches:
             self._wrong(
                 "netlist-truncated",
@@ -190,7 +199,7 @@ class _Reading:
         match = _ARGUMENT.match(self.text, end)
         if match is None:
             word = self.text[start:end]
-            self._wrong("netlist-syntax", f"`{word}` needs a name on its line", start, end)
+            self._wrong("netlist-syntax", f"`{word}` needs a name on its line", start, end, _NAME)
             return "", end
         return match[1], match.end()
 
@@ -224,7 +233,8 @@ class _Reading:
 
     def _next_branch(self, start: int, stop: int, *, wanted: bool) -> None:
         if not self._branches or self._branches[-1].has_else:
-            self._wrong("netlist-syntax", "this branch belongs to no open `ifdef", start, stop)
+            fact = "this branch belongs to no open `ifdef"
+            self._wrong("netlist-syntax", fact, start, stop, _PAIRS)
             return
         branch = self._branches[-1]
         self._close_blank(branch, start)
@@ -234,7 +244,7 @@ class _Reading:
 
     def endif(self, start: int, end: int) -> int:
         if not self._branches:
-            self._wrong("netlist-syntax", "this `endif closes no `ifdef", start, end)
+            self._wrong("netlist-syntax", "this `endif closes no `ifdef", start, end, _PAIRS)
         else:
             self._close_blank(self._branches.pop(), start)
         return end
@@ -247,7 +257,7 @@ class _Reading:
         stop = _LINE.match(self.text, end).end()  # type: ignore[union-attr]
         match = _DEFINITION.match(self.text, end, stop)
         if match is None:
-            self._wrong("netlist-syntax", "`define needs a name", start, stop)
+            self._wrong("netlist-syntax", "`define needs a name", start, stop, _NAME)
         elif match[2]:
             self._wrong(
                 "netlist-unsupported",
@@ -297,10 +307,21 @@ class _Reading:
         )
         return stop
 
+    def unconnected_drive(self, start: int, end: int) -> int:
+        stop = _LINE.match(self.text, end).end()  # type: ignore[union-attr]
+        self._wrong(
+            "netlist-unsupported",
+            "unconnected pins are given a value here",
+            start,
+            stop,
+            "connect the pins that need a value to a constant",
+        )
+        return stop
+
     def default_nettype(self, start: int, end: int) -> int:
         kind, stop = self._argument(start, end)
         if kind and kind not in _KINDS:
-            self._wrong("netlist-syntax", f"`{kind}` is no kind of net", start, stop)
+            self._wrong("netlist-syntax", f"`{kind}` is no kind of net", start, stop, _KIND)
         self.net_types.append(NetType(start, kind))
         return stop
 
@@ -333,6 +354,7 @@ _ACTIONS: Final[Mapping[str, _Action]] = {
     "include": _Reading.include,
     "default_nettype": _Reading.default_nettype,
     "resetall": _Reading.resetall,
+    "unconnected_drive": _Reading.unconnected_drive,
     "begin_keywords": _Reading.begin_keywords,
 }
 _CONDITIONS: Final = frozenset("ifdef ifndef elsif else endif".split())

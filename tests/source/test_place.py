@@ -53,7 +53,7 @@ def test_cell_and_name_stand_where_they_are_found(case: str) -> None:
             assert (text.parameters is None) == (number not in module.parameters)
             if text.parameters is not None:
                 assert source.text[slice(*text.parameters)] == module.parameters[number]
-        assert (text.comma is None) == (text.index == 0)
+        assert (text.comma is None) == (text.place == 0)
         if text.comma is not None:
             assert source.text[text.comma] == ","
 
