@@ -2,6 +2,7 @@
 
 from collections.abc import Iterable, Mapping, Sequence
 from hashlib import sha256
+from typing import Final
 
 import numpy as np
 
@@ -24,7 +25,7 @@ from insertdft.design.flat import Design
 from insertdft.library import find_buffers
 from insertdft.netlist import OPEN, Instance, Module
 from insertdft.styles import Conversion, TestNet, in_port_order, kind_of
-from insertdft.styles.mux_d import sequences
+from insertdft.styles.sequences import Clocking, make_sequences
 from insertdft.survey import Survey
 
 
@@ -58,14 +59,12 @@ def assemble(
         )
         for module in touched
     }
+    shifts = [_shift_clocks(chosen, number, port_names) for number in range(len(chosen.groups))]
     chains = tuple(
-        _chain(f"chain_{number + 1}", chosen.groups[group], port_names)
+        _chain(f"chain_{number + 1}", chosen.groups[group], shifts[group])
         for number, (group, _) in enumerate(arrangement.chains)
     )
     connector = _connector(design, wishes)
-    held = {item.port: item.value for item in (*survey.held, *survey.set_resets)}
-    clocks = list(dict.fromkeys(clock for chain in chains for clock in chain.clocks))
-    enable = port_names[TestNet.SCAN_ENABLE]
     added, without = _added_area(survey, chosen, modules, connector)
     return Plan(
         design=design.netlist.top,
@@ -76,8 +75,8 @@ def assemble(
         chains=chains,
         port_names=port_names,
         connector=connector,
-        ports=_ports(survey, chains, modules[design.netlist.top], enable),
-        sequences=sequences(enable, clocks, held),
+        ports=_ports(survey, chosen, modules[design.netlist.top], port_names),
+        sequences=make_sequences(_clocking(survey, chosen, shifts, port_names)),
         left_alone=_left_alone(survey, chosen),
         lower_bound=arrangement.lower_bound,
         area_before=survey.area,
@@ -101,11 +100,47 @@ def _name_test_nets(namer: PortNamer, nets: tuple[str, ...]) -> dict[str, str]:
     return found
 
 
-def _chain(name: str, group: Group, port_names: Mapping[str, str]) -> ChainPlan:
-    if group.domain is None:
-        clocks = (port_names[TestNet.CLOCK_A], port_names[TestNet.CLOCK_B])
-        return ChainPlan(name, group.style, clocks, None)
-    return ChainPlan(name, group.style, (group.domain.port,), group.domain.edge)
+def _shift_clocks(chosen: Chosen, group: int, port_names: Mapping[str, str]) -> tuple[str, ...]:
+    """Return the ports that shift the chains of a group, in the order they pulse."""
+    style, domain = chosen.groups[group]
+    if style == "mux-d" and domain is not None:
+        return (domain.port,)
+    leaves = chosen.cells.leaves[chosen.cells.group[chosen.cells.leaves] == group]
+    used = {
+        net
+        for number in set(chosen.conversion[leaves].tolist())
+        for net in chosen.conversions[number].test_nets()
+    }
+    return tuple(port_names[net] for net in in_port_order(used))
+
+
+def _chain(name: str, group: Group, clocks: tuple[str, ...]) -> ChainPlan:
+    edges = {"mux-d": group.domain.edge if group.domain else None, "clocked-scan": "rise"}
+    return ChainPlan(name, group.style, clocks, edges.get(group.style))
+
+
+def _clocking(
+    survey: Survey,
+    chosen: Chosen,
+    shifts: Sequence[tuple[str, ...]],
+    port_names: Mapping[str, str],
+) -> Clocking:
+    """Return which clocks pulse when: all chains shift in the same cycles."""
+    by_phase = [
+        [ports[place] for ports in shifts if place < len(ports)]
+        for place in range(max(map(len, shifts)))
+    ]
+    enable = port_names.get(TestNet.SCAN_ENABLE)
+    return Clocking(
+        held={item.port: item.value for item in (*survey.held, *survey.set_resets)},
+        enable=() if enable is None else (enable,),
+        shift=tuple(tuple(dict.fromkeys(ports)) for ports in by_phase),
+        capture=tuple((clock,) for clock in _system_clocks(chosen)),
+    )
+
+
+def _system_clocks(chosen: Chosen) -> list[str]:
+    return list(dict.fromkeys(at.domain.port for at in chosen.groups if at.domain is not None))
 
 
 def _test_nets(
@@ -188,20 +223,41 @@ def _added_area(
     return added, without
 
 
+#: Test nets that are ports of a fixed value in each mode: (role, mission, shift, capture).
+_LEVELS: Final = {
+    TestNet.SCAN_ENABLE: ("scan_enable", 0, 1, 0),
+    TestNet.TEST_MODE: ("test_mode", 0, 1, 1),
+}
+#: Test nets that are clocks: role. All rest at 0, in mission mode too.
+_CLOCKS: Final = {
+    TestNet.SCAN_CLOCK: "scan_clock",
+    TestNet.CLOCK_A: "clock_a",
+    TestNet.CLOCK_B: "clock_b",
+    TestNet.CLOCK_C: "clock_c",
+}
+
+
 def _ports(
-    survey: Survey, chains: Sequence[ChainPlan], top: ModulePlan, enable: str
+    survey: Survey, chosen: Chosen, top: ModulePlan, port_names: Mapping[str, str]
 ) -> tuple[TestPort, ...]:
-    clocks = dict.fromkeys(clock for chain in chains for clock in chain.clocks)
     resets = {item.port: item.value for item in survey.set_resets}
     modes = {item.port: item.value for item in survey.held}
     return (
-        *(TestPort(clock, "clock", off=0) for clock in clocks),
+        *(TestPort(clock, "clock", off=0) for clock in _system_clocks(chosen)),
         *(TestPort(at, "set_reset", shift=on, capture=on) for at, on in resets.items()),
         *(TestPort(at, "test_mode", shift=on, capture=on) for at, on in modes.items()),
-        TestPort(enable, "scan_enable", added=True, mission=0, shift=1, capture=0),
+        *(_test_net_port(net, port) for net, port in port_names.items()),
         *(TestPort(segment.scan_in, "scan_in", added=True, mission=0) for segment in top.segments),
         *(TestPort(segment.scan_out, "scan_out", added=True) for segment in top.segments),
     )
+
+
+def _test_net_port(net: str, port: str) -> TestPort:
+    kind = kind_of(net)
+    if kind in _CLOCKS:
+        return TestPort(port, _CLOCKS[kind], added=True, mission=0, off=0)
+    role, mission, shift, capture = _LEVELS[kind]
+    return TestPort(port, role, added=True, mission=mission, shift=shift, capture=capture)
 
 
 def _left_alone(survey: Survey, chosen: Chosen) -> tuple[LeftAlone, ...]:

@@ -2,7 +2,7 @@
 
 from collections import defaultdict
 from collections.abc import Iterable, Sequence
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 from typing import NamedTuple
 
 import numpy as np
@@ -76,13 +76,14 @@ def choose_cells(survey: Survey, wishes: Wishes, layout: Hierarchy) -> Chosen:
     _agree(layout, conversion, refused)
     leaves = np.flatnonzero(conversion >= 0).astype(np.int32)
     groups, group = _group(survey, chooser.conversions, conversion, leaves)
+    conversions = _give_scan_clocks(layout, chooser.conversions, conversion, group, groups)
     bits = np.zeros(len(design.cell), np.int32)
-    bits[leaves] = [chooser.conversions[at].bits for at in conversion[leaves].tolist()]
+    bits[leaves] = [conversions[at].bits for at in conversion[leaves].tolist()]
     reasons = dict(survey.reasons)
     reasons |= {leaf: refusal.slug for refusal, those in refused.items() for leaf in those}
     findings = [_refusal(design, refusal, those) for refusal, those in refused.items()]
     cells = Cells(leaves, group, bits)
-    return Chosen(cells, groups, conversion, chooser.conversions, reasons, findings)
+    return Chosen(cells, groups, conversion, conversions, reasons, findings)
 
 
 def _group(
@@ -101,6 +102,35 @@ def _group(
     group = np.full(len(survey.design.cell), -1, np.int32)
     group[leaves] = [number_of[key] for key in keys]
     return groups, group
+
+
+def _give_scan_clocks(
+    layout: Hierarchy,
+    conversions: Sequence[Conversion],
+    conversion: Ids,
+    group: Ids,
+    groups: Sequence[Group],
+) -> list[Conversion]:
+    """Give each group of clocked-scan cells a scan clock of its own; return all conversions.
+
+    ``conversion`` is brought up to date. Where a module stands in places of several groups its
+    text can name one scan clock only, so all groups share one then.
+    """
+    found = list(conversions)
+    mine = [number for number, at in enumerate(groups) if at.style == "clocked-scan"]
+    if len(mine) < 2:
+        return found
+    wanted = conversion.copy()
+    for place, number in enumerate(mine, start=1):
+        here = group == number
+        for old in sorted(set(conversion[here].tolist())):
+            pins = {pin: f"{net}/{place}" for pin, net in found[old].test_pins.items()}
+            found.append(replace(found[old], test_pins=pins))
+            wanted[here & (conversion == old)] = len(found) - 1
+    if all((wanted[leaves] == wanted[leaves[0]]).all() for _, leaves in copies(layout)):
+        conversion[:] = wanted
+        return found
+    return list(conversions)
 
 
 def _included(

@@ -19,7 +19,7 @@ from insertdft.text import apply_splices
 @design_options
 @click.option(
     "--style",
-    type=click.Choice(["mux-d"]),
+    type=click.Choice(["mux-d", "clocked-scan"]),
     default="mux-d",
     show_default=True,
     help="Scan style.",

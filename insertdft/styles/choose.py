@@ -1,13 +1,31 @@
 """Choose the conversion of every storage cell, worked out once a kind of cell."""
 
 from collections.abc import Mapping
+from typing import Final, Protocol
 
 from insertdft.design.flat import Design
-from insertdft.library.cell import Cell
+from insertdft.library.cell import Cell, Library
 from insertdft.netlist import OPEN
 from insertdft.simulate.constants import propagate
-from insertdft.styles import mux_d
+from insertdft.styles import clocked_scan, mux_d
 from insertdft.styles.conversion import Conversion, Refusal
+
+
+class StyleModule(Protocol):
+    """What the module of a style answers."""
+
+    def convert(self, library: Library, cell: Cell) -> Conversion | Refusal:
+        """Return how a plain storage cell becomes a scan cell of the style."""
+
+    def as_is(self, cell: Cell) -> Conversion | None:
+        """Return how a cell that is a scan cell of the style already joins a chain."""
+
+
+#: Every style by its name.
+STYLES: Final[Mapping[str, StyleModule]] = {
+    mux_d.NAME: mux_d,
+    clocked_scan.NAME: clocked_scan,
+}
 
 
 class Chooser:
@@ -23,8 +41,9 @@ class Chooser:
         Raises:
             ValueError: The style is unknown.
         """
-        if style != mux_d.NAME:
+        if style not in STYLES:
             raise ValueError(f"unknown style {style!r}")
+        self._style = STYLES[style]
         self.conversions: list[Conversion] = []
         self._design = design
         self._by_cell: dict[str, int | Refusal] = {}
@@ -35,11 +54,11 @@ class Chooser:
         cell = self._design.cell_of(instance)
         if cell is None:
             raise ValueError(f"instance {instance} is a black box")
-        ready = mux_d.as_is(cell)
+        ready = self._style.as_is(cell)
         if ready is not None and not self._scan_pins_free(instance, ready):
             return _in_use(cell)
         if cell.name not in self._by_cell:
-            found = ready or mux_d.convert(self._design.library, cell)
+            found = ready or self._style.convert(self._design.library, cell)
             self._by_cell[cell.name] = self._add(found)
         return self._by_cell[cell.name]
 
@@ -50,7 +69,7 @@ class Chooser:
         return len(self.conversions) - 1
 
     def _scan_pins_free(self, instance: int, ready: Conversion) -> bool:
-        """Return whether a scan cell's enable is tied to its mission value or unconnected."""
+        """Return whether a scan cell's enable or clock is at its mission value or unconnected."""
         if self._constants is None:
             self._constants = propagate(self._design, {})
         pins = self._design.pins(instance)

@@ -4,16 +4,15 @@ The scan cell is the library's own where it has one with the same mission functi
 mux of the library goes in front of the old flip-flop, which stays as it is.
 """
 
-from collections.abc import Mapping, Sequence
-
-from insertdft.description import Cycle
 from insertdft.library import scan_twins
-from insertdft.library.cell import Cell, Library, ScanRole, StorageKind, Style, Twin
+from insertdft.library.cell import Cell, Library, ScanRole, StorageKind, Style
 from insertdft.library.expression import Not, Var
 from insertdft.styles.compose import area_of, compose_mux
 from insertdft.styles.conversion import Conversion, Refusal, ScanTap, TestNet
+from insertdft.styles.twins import as_is as joins
+from insertdft.styles.twins import by_twin
 
-NAME = "mux-d"
+NAME = Style.MUX_D.value
 
 
 def convert(library: Library, cell: Cell) -> Conversion | Refusal:
@@ -24,9 +23,9 @@ def convert(library: Library, cell: Cell) -> Conversion | Refusal:
             f"`{cell.name}` is a latch, and mux-D scan needs an edge-triggered cell",
             "leave it out, or choose --style lssd for latch pairs",
         )
-    twins = scan_twins(library, cell.name, Style.MUX_D)
-    if twins:
-        return _by_twin(library, cell, twins[0])
+    for twin in scan_twins(library, cell.name, Style.MUX_D):
+        if twin.role.scan_enable is not None and twin.role.shift_value == 1:
+            return by_twin(library, cell, twin, {twin.role.scan_enable: TestNet.SCAN_ENABLE})
     return _composed(library, cell)
 
 
@@ -35,18 +34,7 @@ def as_is(cell: Cell) -> Conversion | None:
     role = role_of(cell)
     if role is None or role.scan_enable is None:
         return None
-    return Conversion(
-        style=NAME,
-        how="as-is",
-        before=cell.name,
-        after=cell.name,
-        scan_in=role.scan_in,
-        scan_in_inverted=role.scan_in_inverted,
-        taps=_taps(role),
-        test_pins={role.scan_enable: TestNet.SCAN_ENABLE},
-        bits=role.bits,
-        area=0.0,
-    )
+    return joins(cell, role, {role.scan_enable: TestNet.SCAN_ENABLE})
 
 
 def role_of(cell: Cell) -> ScanRole | None:
@@ -55,81 +43,6 @@ def role_of(cell: Cell) -> ScanRole | None:
         if role.style is Style.MUX_D and role.shift_value == 1:
             return role
     return None
-
-
-def sequences(
-    enable: str, clocks: Sequence[str], held: Mapping[str, int]
-) -> dict[str, tuple[Cycle, ...]]:
-    """Return the clock sequences of a mux-D design.
-
-    While shifting, all clocks pulse together: no chain crosses from one clock to another. At
-    capture they pulse one after the other, so that no cell sees another clock's new data in a
-    race; the order is that of ``clocks``.
-
-    Args:
-        enable: Scan-enable port.
-        clocks: Clock ports, all at 0 when at rest.
-        held: Ports that keep sets and resets off and the test mode on.
-    """
-    together = (tuple(clocks),)
-    in_turn = tuple((clock,) for clock in clocks)
-    holding = tuple(held.items())
-    mission = ((enable, 0),)
-    launch = Cycle(force=mission, pulses=in_turn, why="launch: capture once with scan enable off")
-    return {
-        "setup": (Cycle(force=(*holding, (enable, 0)), why="sets and resets off"),),
-        "shift": (
-            Cycle(force=((enable, 1),), scan=True, pulses=together, why="one bit along the chain"),
-        ),
-        "capture": (
-            Cycle(force=mission, inputs=True, measure=True, pulses=in_turn, why="capture"),
-        ),
-        "launch_on_capture": (
-            Cycle(force=mission, inputs=True, pulses=in_turn, why=launch.why),
-            Cycle(measure=True, pulses=in_turn, at_speed=True, why="capture the response"),
-        ),
-        "launch_on_shift": (
-            Cycle(
-                force=((enable, 1),),
-                scan=True,
-                pulses=together,
-                why="launch: the last shift makes the transition",
-            ),
-            Cycle(
-                force=mission,
-                inputs=True,
-                measure=True,
-                pulses=in_turn,
-                at_speed=True,
-                why="capture with scan enable switched off within one cycle",
-            ),
-        ),
-    }
-
-
-def _by_twin(library: Library, cell: Cell, twin: Twin) -> Conversion | Refusal:
-    role, new = twin.role, library.cells[twin.cell]
-    if role.scan_enable is None or role.shift_value != 1:
-        return _composed(library, cell)
-    return Conversion(
-        style=NAME,
-        how="twin",
-        before=cell.name,
-        after=twin.cell,
-        pins={old: new for old, new in twin.pins.items() if old != new},
-        ties=dict(twin.ties),
-        scan_in=role.scan_in,
-        scan_in_inverted=role.scan_in_inverted,
-        taps=_taps(role),
-        test_pins={role.scan_enable: TestNet.SCAN_ENABLE},
-        bits=role.bits,
-        area=None if new.area is None or cell.area is None else new.area - cell.area,
-    )
-
-
-def _taps(role: ScanRole) -> tuple[ScanTap, ...]:
-    taps = [ScanTap(out.pin, out.inverted, out.test_only) for out in role.outputs]
-    return tuple(sorted(taps, key=lambda tap: (not tap.test_only, tap.inverted)))
 
 
 def _composed(library: Library, cell: Cell) -> Conversion | Refusal:
