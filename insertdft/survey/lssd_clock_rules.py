@@ -16,7 +16,7 @@ def clock_control(rules: Clocked) -> list[Witness]:
         both = when.anded()
         if when.at_rest:
             found.append(_not_off(rules, group))
-        elif not any(when.opens(clock) for clock in when.clocks):
+        elif when.never_opens():
             found.append(_never_on(rules, group, both))
         if both is not None:
             found.append(_anded(rules, group, both))

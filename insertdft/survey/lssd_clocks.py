@@ -34,12 +34,14 @@ class Opening:
         on: Words by set of clocks that are on, all others at rest; bit p is whether the latch is
             open for pattern p of the gating signals. Sets of at most two clocks.
         ones: The word with every pattern.
+        exact: Whether the patterns are all there are.
     """
 
     clocks: tuple[int, ...]
     gating: tuple[int, ...]
     on: Mapping[frozenset[int], int] = field(repr=False)
     ones: int = field(repr=False)
+    exact: bool
 
     def word(self, *clocks: int) -> int:
         """Return the word for these clocks on."""
@@ -50,9 +52,10 @@ class Opening:
         """Patterns under which the latch is open while every clock rests."""
         return self.word()
 
-    def opens(self, clock: int) -> int:
-        """Return the patterns under which ``clock`` alone opens the latch."""
-        return self.word(clock) & ~self.at_rest
+    def never_opens(self) -> bool:
+        """Return whether no clock alone can open the latch, whatever the gating signals are."""
+        alone = (self.word(clock) & ~self.at_rest for clock in self.clocks)
+        return not any(alone) and (self.exact or not self.clocks)
 
     def anded(self) -> tuple[int, int] | None:
         """Return two clocks whose joint effect is not that of one or the other, or None.
@@ -105,7 +108,7 @@ class _Cone:
         words, ones = _patterns(gating)
         sets = [frozenset(some) for size in (0, 1, 2) for some in combinations(clocks, size)]
         on = {some: self._value(enable, pins, some, words, ones) for some in sets}
-        return Opening(clocks, gating, on, ones)
+        return Opening(clocks, gating, on, ones, len(gating) <= MOST_EXACT)
 
     def _walk(self, net: int) -> None:
         """Collect gates (leaves first) and leaves; a clock gate is passed by its clock."""

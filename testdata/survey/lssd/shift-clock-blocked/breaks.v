@@ -1,0 +1,7 @@
+module top (c, a, b, en, d, i, q);
+  input c, a, b, en, d, i; output q;
+  wire m, g;
+  L1 x (.D(d), .C(c), .I(i), .A(a), .Q(m));
+  AND2 gate (.A(b), .B(en), .Y(g));
+  LAT y (.D(m), .G(g), .Q(q));
+endmodule
