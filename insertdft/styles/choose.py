@@ -60,7 +60,20 @@ class Chooser:
         if cell.name not in self._by_cell:
             found = ready or self._style.convert(self._design.library, cell)
             self._by_cell[cell.name] = self._add(found)
-        return self._by_cell[cell.name]
+        chosen = self._by_cell[cell.name]
+        if not isinstance(chosen, Refusal) and not self._can_be_tapped(instance, chosen):
+            return _no_tap(cell)
+        return chosen
+
+    def _can_be_tapped(self, instance: int, number: int) -> bool:
+        """Return whether the output for the chain is a pin of its own or connected already.
+
+        One bit of a bus that is unconnected cannot be given a net alone.
+        """
+        conversion = self.conversions[number]
+        tap = conversion.taps[0].pin
+        old = {new: old for old, new in conversion.pins.items()}.get(tap, tap)
+        return "[" not in tap or self._design.net_at(instance, old) != OPEN
 
     def _add(self, found: Conversion | Refusal) -> int | Refusal:
         if isinstance(found, Refusal):
@@ -78,6 +91,14 @@ class Chooser:
             if net != OPEN and self._constants.get(net) != 0:
                 return False
         return True
+
+
+def _no_tap(cell: Cell) -> Refusal:
+    return Refusal(
+        "no-scan-cell",
+        f"the bit of `{cell.name}` that leads on to the next cell is unconnected",
+        "connect the whole bus of that output to a wire",
+    )
 
 
 def _in_use(cell: Cell) -> Refusal:

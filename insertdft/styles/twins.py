@@ -14,7 +14,7 @@ def by_twin(library: Library, cell: Cell, twin: Twin, test_pins: Mapping[str, st
         how="twin",
         before=cell.name,
         after=twin.cell,
-        pins={old: new for old, new in twin.pins.items() if old != new},
+        pins=_renamed(twin.pins),
         ties=dict(twin.ties),
         scan_in=twin.role.scan_in,
         scan_in_inverted=twin.role.scan_in_inverted,
@@ -23,6 +23,13 @@ def by_twin(library: Library, cell: Cell, twin: Twin, test_pins: Mapping[str, st
         bits=twin.role.bits,
         area=None if new.area is None or cell.area is None else new.area - cell.area,
     )
+
+
+def _renamed(pins: Mapping[str, str]) -> dict[str, str]:
+    """Return the pins whose name changes; of a bus also its name without an index."""
+    found = {old: new for old, new in pins.items() if old != new}
+    buses = {old.partition("[")[0]: new.partition("[")[0] for old, new in found.items()}
+    return {**buses, **found}
 
 
 def as_is(cell: Cell, role: ScanRole, test_pins: Mapping[str, str]) -> Conversion:

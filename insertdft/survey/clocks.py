@@ -49,21 +49,22 @@ class ClockPin(NamedTuple):
 
 
 def clock_pin(cell: Cell) -> ClockPin | None:
-    """Return the clock pin of a cell that the library describes by one ff or latch group.
+    """Return the clock pin of a cell whose every storage element has the same.
 
     None if the cell is described by a state table, has several clocks, or a clock that depends on
     more than one pin.
     """
-    if len(cell.storage) != 1:
+    clocks = {(at.clock, at.clock_also, at.kind) for at in cell.storage}
+    if len(clocks) != 1:
         return None
-    storage = cell.storage[0]
-    if storage.clock is None or storage.clock_also is not None:
+    clock, also, kind = clocks.pop()
+    if clock is None or also is not None:
         return None
-    literal = as_literal(storage.clock, variables(storage.clock))
+    literal = as_literal(clock, variables(clock))
     inner = literal.part if isinstance(literal, Not) else literal
     if not isinstance(inner, Var):
         return None
-    return ClockPin(inner.name, isinstance(literal, Not), storage.kind is StorageKind.LATCH)
+    return ClockPin(inner.name, isinstance(literal, Not), kind is StorageKind.LATCH)
 
 
 def _by_clock_pin(

@@ -1,7 +1,7 @@
 """Whether sets and resets can be held off while a chain shifts."""
 
 from collections import defaultdict
-from collections.abc import Iterator
+from collections.abc import Iterable
 from typing import Final
 
 from insertdft.library.cell import Cell
@@ -49,9 +49,11 @@ def find_set_resets(walker: Walker, storage: Ids, verdict: Verdict) -> tuple[Hel
     return _hold(walker, by_control, verdict)
 
 
-def _conditions(cell: Cell | None) -> Iterator[Expression]:
-    for storage in cell.storage if cell else ():
-        yield from (at for at in (storage.clear, storage.preset) if at is not None)
+def _conditions(cell: Cell | None) -> Iterable[Expression]:
+    """Return each condition that sets or resets a part of the cell, once."""
+    groups = cell.storage if cell else ()
+    found = [at for group in groups for at in (group.clear, group.preset) if at is not None]
+    return dict.fromkeys(found)
 
 
 def _single_pin(condition: Expression) -> tuple[str, int] | None:
