@@ -8,6 +8,8 @@ import re
 from collections.abc import Mapping
 from dataclasses import dataclass
 
+from outside import outside
+
 from insertdft.design.flat import Design
 from insertdft.design.link import link
 from insertdft.library import Library, read_library
@@ -163,6 +165,26 @@ def read_bench(text: str) -> Gates:
             else:
                 gates[found[1]] = (kind, terms)
     return Gates(tuple(inputs), tuple(outputs), flops, gates)
+
+
+def bench_text(name: str) -> str:
+    """Return the .bench text of a public benchmark circuit, from the folder of outside data."""
+    text = outside("bench", f"{name}.bench").read_text(encoding="utf-8")
+    if name == "s400":
+        # A pair of inverters hangs on a net that nothing drives; without it the circuit has the
+        # 162 gates of the published one.
+        lines = text.splitlines()
+        text = "\n".join(line for line in lines if not _is_loose(line, lines))
+    return text
+
+
+def _is_loose(line: str, lines: list[str]) -> bool:
+    """Return whether a line is an inverter whose input is driven by none or by such a one."""
+    if "= NOT(" not in line:
+        return False
+    source = line.partition("(")[2].partition(")")[0]
+    drivers = [one for one in lines if one.startswith((f"{source} =", f"INPUT({source})"))]
+    return not drivers or all(_is_loose(one, lines) for one in drivers)
 
 
 def random_gates(seed: int, inputs: int, flops: int, gates: int, outputs: int) -> Gates:

@@ -11,7 +11,7 @@ from typing import Final
 
 import numpy as np
 
-from insertdft.design.flat import Design
+from insertdft.design.flat import INOUT, OUTPUT, Design
 from insertdft.library.cell import Cell, Storage, StorageKind
 from insertdft.library.expression import And, Const, Expression, Not, Or, Var, negation, variables
 from insertdft.library.functions import pruned
@@ -84,8 +84,9 @@ def storages(cell: Cell) -> tuple[Storage, ...]:
 
 def _bus_nets(design: Design) -> Flags:
     """Return which nets have several drivers, one that can let go, or one beside a port."""
-    drivers = design.drivers
-    found = np.diff(drivers.start) > 1
+    driving = np.isin(design.pin_direction, (OUTPUT, INOUT)) & (design.pin_net >= 0)
+    count = np.bincount(design.pin_net[driving], minlength=design.net_count)
+    found: Flags = count > 1
     letting_go = [
         (number, pin.name)
         for number, cell in enumerate(design.cells)
@@ -98,9 +99,8 @@ def _bus_nets(design: Design) -> Flags:
         rows = np.flatnonzero(design.pin_name == names.get(pin, -1))
         nets = design.pin_net[rows[design.cell[design.pin_instance[rows]] == number]]
         found[nets[nets >= 0]] = True
-    driven = np.diff(drivers.start) > 0
     ports = np.array(sorted(design.input_ports), np.int64)
-    found[ports[driven[ports]]] = True
+    found[ports[count[ports] > 0]] = True
     found[:FIRST_NET] = False
     return found
 

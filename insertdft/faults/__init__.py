@@ -1,0 +1,1 @@
+"""Single stuck-at faults: lists, classes, coverage of patterns, proofs that no test exists."""

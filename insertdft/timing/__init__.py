@@ -1,0 +1,1 @@
+"""Static timing on the library's own tables."""
