@@ -66,7 +66,7 @@ def match(plain: Cell, scan: Cell, role: ScanRole) -> Twin | None:
     if one is None or two is None or not _may_match(one, two):
         return None
     for inputs in _assignments(one, two):
-        for ties in _ties(two, inputs):
+        for ties in _ties(two, inputs, role):
             outputs = _outputs(one, two, inputs, ties)
             if outputs is not None:
                 pins = {pin: inputs.get(pin) or outputs.get(pin) for pin in plain.pins}
@@ -154,8 +154,10 @@ def _likely(one: Mission, two: Mission) -> Iterator[tuple[str, ...]]:
     yield tuple(taken)
 
 
-def _ties(two: Mission, inputs: Mapping[str, str]) -> Iterator[dict[str, int]]:
+def _ties(two: Mission, inputs: Mapping[str, str], role: ScanRole) -> Iterator[dict[str, int]]:
     extra = [pin for pin in two.places if pin not in inputs.values()]
+    if {role.clock_a, role.clock_b, role.clock_2, role.scan_clock} & set(extra):
+        return  # a clock that mission use needs too, such as B of a double latch, is never tied
     for values in product((1, 0), repeat=len(extra)):
         yield dict(zip(extra, values, strict=True))
 
