@@ -55,12 +55,17 @@ def read_cell(group: Group, context: Context) -> Cell:
     """Return the cell that ``group`` describes."""
     reader = context.reader
     texts, buses = open_pins(group, {**context.types, **read_types(group)})
-    storage, banks = read_storages(group, reader, buses)
-    table = read_state_table(group, reader)
-    vectors = {**buses, **banks}
-    nodes = dict.fromkeys(table.nodes if table else ())
-    known = {**{text.name: None for text in texts}, **_state_names(storage), **nodes}
-    names = _Names(vectors, known)
+    outside = {text.name for text in texts if _direction(text) != "internal"}
+    storage, banks = read_storages(group, reader, buses, outside)
+    table, nodes = read_state_table(group, reader, outside)
+    shown = {
+        text.name: (node,)
+        for text in texts
+        if (node := nodes.get(text.text("internal_node") or "")) and text.name not in outside
+    }
+    vectors = {**buses, **banks, **shown, **{name: (node,) for name, node in nodes.items()}}
+    states = dict.fromkeys((*_state_names(storage), *nodes.values()))
+    names = _Names(vectors, {**{text.name: None for text in texts}, **states})
     pins = {text.name: _pin(text, names, context) for text in texts}
     test = _test_cell(group, context)
     return Cell(
@@ -93,8 +98,12 @@ def _state_names(storages: tuple[Storage, ...]) -> dict[str, None]:
     )
 
 
+def _direction(text: PinText) -> str:
+    return (text.text("direction") or "internal").strip().lower()
+
+
 def _pin(text: PinText, names: _Names, context: Context) -> Pin:
-    direction = (text.text("direction") or "internal").strip().lower()
+    direction = _direction(text)
     return Pin(
         name=text.name,
         direction=direction,
@@ -114,7 +123,8 @@ def _pin(text: PinText, names: _Names, context: Context) -> Pin:
 
 
 def _function(text: PinText, names: _Names, reader: Reader) -> Expression | None:
-    for attribute in ("function", "state_function", "internal_node"):
+    shows = ("function", "state_function", "internal_node")
+    for attribute in shows[:1] if _direction(text) == "internal" else shows:
         found = _expression(text, attribute, names, reader)
         if found is not None:
             return found
@@ -168,7 +178,8 @@ def _test_cell(cell: Group, context: Context) -> TestCell | None:
         return None
     group, reader = groups[0], context.reader
     texts, buses = open_pins(group, {**context.types, **read_types(cell)})
-    storage, banks = read_storages(group, reader, buses)
+    outside = {text.name for text in texts if _direction(text) != "internal"}
+    storage, banks = read_storages(group, reader, buses, outside)
     pins = dict.fromkeys(text.name for text in texts)
     names = _Names({**buses, **banks}, {**pins, **_state_names(storage)})
     functions = {text.name: _expression(text, "function", names, reader) for text in texts}

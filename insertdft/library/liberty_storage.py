@@ -4,7 +4,7 @@ A bank is opened into one ``Storage`` a bit, its variables named ``IQ[0]``, ``IQ
 """
 
 import re
-from collections.abc import Mapping
+from collections.abc import Collection, Mapping
 from itertools import pairwise
 from typing import Final
 
@@ -19,23 +19,28 @@ MOST_BANK_BITS: Final = 4096
 
 
 def read_storages(
-    cell: Group, reader: Reader, buses: Mapping[str, tuple[str, ...]]
+    cell: Group, reader: Reader, buses: Mapping[str, tuple[str, ...]], pins: Collection[str]
 ) -> tuple[tuple[Storage, ...], dict[str, tuple[str, ...]]]:
-    """Return the storage of a cell (or test_cell), and the bits of its bank variables."""
+    """Return the storage of a cell (or test_cell), and what its variables are called by bit.
+
+    A variable that has the name of one of ``pins`` gets another, so that names stay apart.
+    """
     found: list[Storage] = []
-    banks: dict[str, tuple[str, ...]] = {}
+    variables: dict[str, tuple[str, ...]] = {}
     for group in cell.all_of(*STORAGE_GROUPS):
         names = (*group.names, "", "")[:3]
-        if not group.kind.endswith("_bank"):
-            found.append(_storage(group, reader, names[0], names[1]))
-            continue
-        bits = _bank_bits(names[2])
+        bits = _bank_bits(names[2]) if group.kind.endswith("_bank") else 0
         for name in names[:2]:
-            banks[name] = tuple(f"{name}[{bit}]" for bit in range(bits))
-        vectors = {**buses, **banks}
+            own = _apart(name, pins)
+            variables[name] = tuple(f"{own}[{bit}]" for bit in range(bits)) or (own,)
+        vectors = {**buses, **variables}
         whole = _storage(group, reader, names[0], names[1])
-        found += [_bit_of(whole, bit, vectors) for bit in range(bits)]
-    return tuple(found), banks
+        found += [_bit_of(whole, bit, vectors) for bit in range(bits or 1)]
+    return tuple(found), variables
+
+
+def _apart(name: str, pins: Collection[str]) -> str:
+    return f"state {name}" if name in pins else name
 
 
 def _bank_bits(text: str) -> int:
@@ -65,8 +70,8 @@ def _bit_of(whole: Storage, bit: int, vectors: Mapping[str, tuple[str, ...]]) ->
 
     return Storage(
         whole.kind,
-        f"{whole.state}[{bit}]",
-        f"{whole.state_inverted}[{bit}]",
+        vectors[whole.state][bit],
+        vectors[whole.state_inverted][bit],
         1,
         own(whole.data),
         own(whole.clock),
@@ -109,14 +114,18 @@ def _with_data(storage: Storage, data: Expression | None) -> Storage:
     )
 
 
-def read_state_table(cell: Group, reader: Reader) -> StateTable | None:
-    """Return the statetable group of a cell, or None."""
+def read_state_table(
+    cell: Group, reader: Reader, pins: Collection[str]
+) -> tuple[StateTable | None, dict[str, str]]:
+    """Return the statetable group of a cell, and what its nodes are called in it.
+
+    A node that has the name of one of ``pins`` gets another, so that names stay apart.
+    """
     groups = cell.all_of("statetable")
     if not groups:
-        return None
+        return None, {}
     group = groups[0]
-    columns = [tuple(name.split()) for name in _quoted(group)]
-    inputs, nodes = (*columns, (), ())[:2]
+    inputs, nodes = (*(tuple(name.split()) for name in group.names), (), ())[:2]
     rows = []
     for line in _rows(group.text("table") or ""):
         parts = [tuple(part.split()) for part in line.split(":")]
@@ -127,11 +136,8 @@ def read_state_table(cell: Group, reader: Reader) -> StateTable | None:
             reader.diagnostics.append(error("library-syntax", message, group.span("table"), hint))
             continue
         rows.append((parts[0], parts[1], parts[2]))
-    return StateTable(inputs, nodes, tuple(rows))
-
-
-def _quoted(group: Group) -> tuple[str, ...]:
-    return group.names
+    called = {node: _apart(node, pins) for node in nodes}
+    return StateTable(inputs, tuple(called.values()), tuple(rows)), called
 
 
 def _rows(text: str) -> list[str]:

@@ -195,8 +195,6 @@ def _procedure(item: Node, module: Module) -> None:
     """Take in one ``always``: flip-flops where edges are named, else latches or plain logic."""
     senses = list(item.sens_list.list) if item.sens_list is not None else []
     edges = [sense for sense in senses if sense.type in ("posedge", "negedge")]
-    if edges and len(edges) != len(senses):
-        raise UnsupportedError("a procedure waits for edges and levels")
     if not senses:
         raise UnsupportedError("a procedure waits for nothing")
     for net, following in run(item.statement, Values()).result().items():

@@ -3,7 +3,7 @@ from kits import cell, library, text
 
 from insertdft.diagnostics import DesignError, Severity
 from insertdft.library import StorageKind, read_library
-from insertdft.library.expression import Not, Var, parse_expression
+from insertdft.library.expression import Not, Var, parse_expression, variables
 from insertdft.library.functions import same
 from insertdft.text import SourceText
 
@@ -232,3 +232,37 @@ def test_row_of_a_state_table_that_does_not_fit_is_an_error() -> None:
         library('cell (X) { statetable ("A B", "M") { table : "L L : - : L, L : - : H"; } }')
 
     assert [item.slug for item in caught.value.diagnostics] == ["library-syntax"]
+
+
+def test_state_named_like_a_pin_is_told_apart_from_it() -> None:
+    found = library(
+        """cell (T) { statetable ("D G", "Q") { table : "H/L H : - : H/L, - L : - : N"; }
+          pin (D) { direction : input; } pin (G) { direction : input; }
+          pin (Q) { direction : output; internal_node : "Q"; } }
+        cell (F) { ff (Q, QN) { next_state : "D E + Q E'"; clocked_on : "CK"; }
+          pin (D, E, CK) { direction : input; }
+          pin (Q) { direction : output; function : "Q"; }
+          pin (Z) { direction : output; function : "QN"; } }"""
+    ).cells
+
+    table, flip_flop = found["T"], found["F"]
+    assert table.storage[0].state not in table.pins
+    assert table.pins["Q"].function == Var(table.storage[0].state)
+    [storage] = flip_flop.storage
+    assert storage.state not in flip_flop.pins
+    assert flip_flop.pins["Q"].function == Var(storage.state)
+    assert flip_flop.pins["Z"].function == Var("QN")
+    assert storage.data is not None
+    assert set(variables(storage.data)) == {"D", "E", storage.state}
+
+
+def test_internal_pin_of_another_name_stands_for_its_node() -> None:
+    found = cell(
+        """cell (X) { statetable ("CK EN", "M") { table : "L L : - : L, L H : - : H, H - : - : N"; }
+        pin (CK) { direction : input; } pin (EN) { direction : input; }
+        pin (inner) { direction : internal; internal_node : "M"; }
+        pin (G) { direction : output; state_function : "CK & inner"; } }"""
+    )
+
+    assert found.pins["G"].function == parse_expression("CK & M")
+    assert found.pins["inner"].function is None
