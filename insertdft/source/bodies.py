@@ -88,7 +88,8 @@ def take_apart(bodies: Sequence[str], table: PinTable) -> Connections | None:
         table: Gets the pin names that it does not have.
     """
     joined = ";" + ";".join(bodies) + ";"
-    is_plain = joined.count(";") == len(bodies) + 1 and not _BRACKET_IN_NAME.search(joined)
+    is_plain = joined.count(";") == len(bodies) + 1 == joined.count(");") + 1
+    is_plain = is_plain and not _BRACKET_IN_NAME.search(joined)
     found = (_by_brackets(joined, table) if is_plain else None) or _by_pattern(joined, table)
     if found is None or len(found.counts) != len(bodies):
         return None

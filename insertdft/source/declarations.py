@@ -8,6 +8,7 @@ from insertdft.source.draft import Draft
 from insertdft.source.nets import PortDeclaration, spelling
 from insertdft.text import Span
 
+DIRECTIONS: Final = ("input", "output", "inout")
 NET_KINDS: Final = frozenset(
     "wire tri tri0 tri1 wand triand wor trior trireg uwire supply0 supply1".split()
 )

@@ -14,7 +14,7 @@ from typing import Final, NamedTuple, Protocol
 
 import numpy as np
 
-from insertdft.netlist import Header, Ids, Offsets
+from insertdft.netlist import Header, Ids
 from insertdft.netlist.names import KEYWORDS, canonical
 from insertdft.source.bodies import NOTHING, PinTable, take_apart
 from insertdft.source.nets import Nets, kept
@@ -105,6 +105,7 @@ class Draft:
         name: Kept spelling.
         start: Offset of ``module``.
         body_end: Offset of ``endmodule``.
+        is_closed: Whether it was read to its end.
         header: Where ports can be added.
         port_names: Internal kept names in port-list order, with their offsets.
         renamed: Internal name -> name of the port, where the header has ``.port(net)``.
@@ -113,6 +114,13 @@ class Draft:
         names: Instance names.
         assigns: Continuous assignments, once it is closed.
         parameters: Parameter overrides by instance.
+        before: See ``Module.instance_before``; this and the following once it is closed.
+        starts: See ``Module.instance_start``.
+        ends: See ``Module.instance_end``.
+        cells: Shape (n,), ids into ``tables.cells``.
+        pins: Shape (rows,), ids of pin names; one row a connection, whatever its width.
+        numbers: Shape (rows,), number of the expression of each connection.
+        row_start: Shape (n + 1,), rows of instance i are ``row_start[i]:row_start[i + 1]``.
     """
 
     def __init__(
@@ -126,6 +134,7 @@ class Draft:
         self.tables = tables
         self.name = ""
         self.start = self.body_end = 0
+        self.is_closed = False
         self.header: Header | None = None
         self.port_names: list[tuple[str, int]] = []
         self.renamed: dict[str, str] = {}
@@ -134,6 +143,9 @@ class Draft:
         self.names: list[str] = []
         self.assigns: list[Assign] = []
         self.parameters: dict[int, str] = {}
+        self.before = self.starts = self.ends = np.zeros(0, np.int64)
+        self.cells = self.pins = self.numbers = np.zeros(0, np.int32)
+        self.row_start = np.zeros(1, np.int64)
         self._by_grammar = by_grammar
         self._assign_texts: list[tuple[str, str, int]] = []
         self._offsets = (array("q"), array("q"), array("q"))
@@ -149,6 +161,15 @@ class Draft:
     def close(self, end: int) -> None:
         """Finish reading: ``endmodule`` stands at ``end``."""
         self.body_end = end
+        self.is_closed = True
+        self.before, self.starts, self.ends = (
+            np.frombuffer(column, np.int64) if column else np.zeros(0, np.int64)
+            for column in self._offsets
+        )
+        self.cells, self.pins = _joined(self._cells), _joined(self._pins)
+        self.numbers = _joined(self._numbers)
+        counts = _joined(self._counts)
+        self.row_start = np.concatenate(([0], np.cumsum(counts, dtype=np.int64)))
         # Numbered last, so that the names in it are not met before their declarations.
         number = self.nets.number
         self.assigns = [
@@ -224,42 +245,6 @@ class Draft:
         if parameters:
             overrides = enumerate(parameters, first)
             self.parameters.update((number, text) for number, text in overrides if text)
-
-    @property
-    def before(self) -> Offsets:
-        """See ``Module.instance_before``."""
-        return np.array(self._offsets[0], np.int64)
-
-    @property
-    def starts(self) -> Offsets:
-        """See ``Module.instance_start``."""
-        return np.array(self._offsets[1], np.int64)
-
-    @property
-    def ends(self) -> Offsets:
-        """See ``Module.instance_end``."""
-        return np.array(self._offsets[2], np.int64)
-
-    @property
-    def cells(self) -> Ids:
-        """Shape (n,), ids into ``tables.cells``."""
-        return _joined(self._cells)
-
-    @property
-    def pins(self) -> Ids:
-        """Shape (rows,), ids into ``tables.pins``; one row a connection, whatever its width."""
-        return _joined(self._pins)
-
-    @property
-    def numbers(self) -> Ids:
-        """Shape (rows,), number of the expression of each connection."""
-        return _joined(self._numbers)
-
-    @property
-    def row_start(self) -> Offsets:
-        """Shape (n + 1,), rows of instance i are ``row_start[i]:row_start[i + 1]``."""
-        counts = _joined(self._counts)
-        return np.concatenate(([0], np.cumsum(counts, dtype=np.int64))).astype(np.int64)
 
 
 def _joined(parts: list[Ids]) -> Ids:

@@ -14,7 +14,7 @@ from insertdft.netlist.names import KEYWORDS, canonical, split_bit
 from insertdft.source.grammar import NotVerilogError, parse
 from insertdft.source.nets import Nets, spelling
 from insertdft.source.spelling import NotStructuralError, spell
-from insertdft.source.tokens import NAME, Token, tokens
+from insertdft.source.tokens import ASSIGN_HEAD, NAME, Token, tokens
 
 
 class Bits(NamedTuple):
@@ -90,11 +90,10 @@ def bits_of(text: str, scope: Scope) -> Bits:
 
 
 def _through_grammar(text: str, words: list[Token], scope: Scope) -> Bits:
-    head = [Token("name", "assign", 0, 0), Token("name", "x", 0, 0), Token("operator", "=", 0, 0)]
     end = Token("operator", ";", len(text), len(text))
     shown = " ".join(text.split())
     try:
-        plain = spell(parse([*head, *words, end]).right)
+        plain = spell(parse([*ASSIGN_HEAD, *words, end]).right)
     except NotVerilogError:
         raise ExpressionError(
             "netlist-syntax", f"`{shown}` is no expression", "look for a missing comma or bracket"

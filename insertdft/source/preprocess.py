@@ -61,6 +61,14 @@ class Macros:
 
 def prepare(source: SourceText, macros: Macros, complaints: Complaints) -> Prepared:
     """Return the text without directives; add what it defines to ``macros``."""
+    lone = _LONE_RETURN.search(source.text) if "\r" in source.text else None
+    if lone:
+        complaints.error(
+            "netlist-syntax",
+            "a carriage return stands without a line feed",
+            Span(source, lone.start(), lone.end()),
+            "save the text with usual line ends; readers differ on where a comment ends here",
+        )
     if "`" not in source.text:
         return Prepared(source, source.text, (NetType(0, "wire"),))
     reading = _Reading(source, macros, complaints)
@@ -68,6 +76,7 @@ def prepare(source: SourceText, macros: Macros, complaints: Complaints) -> Prepa
     return Prepared(source, reading.code(), tuple(reading.net_types))
 
 
+_LONE_RETURN: Final = re.compile(r"\r(?!\n)")
 _ACCENT: Final = re.compile(
     rf"{COMMENT}|{STRING}|\\\S++|`(?P<word>{NAME})?", re.ASCII
 )  # the first three may hold accents that mean nothing
@@ -75,10 +84,11 @@ _LINE: Final = re.compile(r"(?:[^\n\\]++|\\(?s:.))*+")
 _ARGUMENT: Final = re.compile(rf"[ \t]*+({NAME})", re.ASCII)
 _NOT_LINE_END: Final = re.compile(r"[^\n]")
 _DEFINITION: Final = re.compile(rf"[ \t]*+({NAME})(\(?)((?s:.*))", re.ASCII)
+_TIMESCALE: Final = re.compile(r"\s*+10{0,2}\s*+[munpf]?s\s*+/\s*+10{0,2}\s*+[munpf]?s\b")
 _VERSION: Final = re.compile(r'[ \t]*+"1364-[\w-]+"', re.ASCII)
 
 #: Directives that say nothing about structure; the rest of their line goes with them.
-_WHOLE_LINE: Final = frozenset("timescale line pragma".split())
+_WHOLE_LINE: Final = frozenset("line pragma".split())
 #: The same without arguments.
 _ONE_WORD: Final = frozenset(
     """celldefine endcelldefine nounconnected_drive end_keywords suppress_faults
@@ -329,6 +339,13 @@ class _Reading:
         self.net_types.append(NetType(start, "wire"))
         return end
 
+    def timescale(self, start: int, end: int) -> int:
+        match = _TIMESCALE.match(self.text, end)
+        if match is None:
+            hint = "write it like `timescale 1ns / 1ps"
+            self._wrong("netlist-syntax", "`timescale needs two times", start, end, hint)
+        return match.end() if match else end
+
     def begin_keywords(self, start: int, end: int) -> int:
         match = _VERSION.match(self.text, end)
         if match is None:
@@ -355,6 +372,7 @@ _ACTIONS: Final[Mapping[str, _Action]] = {
     "default_nettype": _Reading.default_nettype,
     "resetall": _Reading.resetall,
     "unconnected_drive": _Reading.unconnected_drive,
+    "timescale": _Reading.timescale,
     "begin_keywords": _Reading.begin_keywords,
 }
 _CONDITIONS: Final = frozenset("ifdef ifndef elsif else endif".split())

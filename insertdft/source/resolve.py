@@ -105,7 +105,7 @@ def check_names(draft: Draft, complaints: Complaints) -> None:
                     "rename one of them",
                 )
     if any(map(nets.number.__contains__, draft.names)):
-        both = [name for name in draft.names if name in nets.number and nets.is_declared(name)]
+        both = [name for name in draft.names if name and nets.is_declared(name)]
         if both:
             complaints.add(_called_alike(draft, both))
 

@@ -9,6 +9,7 @@ comes out as a whole statement and goes to ``skeleton.py``.
 import re
 from collections import defaultdict
 from collections.abc import Iterator
+from contextlib import suppress
 from itertools import islice
 from operator import attrgetter
 from typing import Final
@@ -40,13 +41,14 @@ BATCH: Final = 4096
 def read_modules(
     prepared: Prepared, macros: Macros, tables: Tables, complaints: Complaints
 ) -> list[Draft]:
-    """Return the modules of one source, not yet linked with each other."""
+    """Return the modules of one source, not yet linked with each other.
+
+    A module that is not read to its end is left out; there is a complaint about it.
+    """
     reading = _Reading(prepared, macros, tables, complaints)
-    try:
+    with suppress(SyntaxStopError):
         reading.run()
-    except SyntaxStopError:
-        reading.close()
-    return reading.drafts
+    return [draft for draft in reading.drafts if draft.is_closed]
 
 
 class _Reading:
@@ -71,10 +73,6 @@ class _Reading:
         at: int | None = 0
         while at is not None:
             at = self._scan(at)
-
-    def close(self) -> None:
-        """End the open module, if there is one."""
-        self._open = None
 
     def _scan(self, start: int) -> int | None:
         """Read statements from ``start`` on; return where to go on, or None at the end."""
@@ -151,6 +149,7 @@ class _Reading:
                 raise self._outside(word)
         elif word.text == "endmodule":
             draft.close(start)
+            self._skeleton.check_parameters(draft)
             self._open = None
         elif word.text != ";":
             self._skeleton.read(draft, match.start(), start, end)
@@ -184,20 +183,31 @@ class _Reading:
 
     def _check_end(self, at: int) -> None:
         """Complain unless the text ends here, between two modules."""
-        code, source = self._code, self._prepared.source
+        code = self._code
         gap = REST.match(code, at)
         rest = gap.end() if gap else at
         if rest < len(code):
-            opening = {"/*": "comment", "(*": "attribute"}.get(code[rest : rest + 2])
-            what = f"this {opening}" if opening else "this statement"
-            self._complaints.error(
-                "netlist-truncated",
-                f"the text ends within {what}",
-                word_at(source, rest),
-                "close it, or write the file again if it was cut off",
-            )
+            self._not_understood(rest)
         elif self._open is not None:
             self._no_end(self._open)
+
+    def _not_understood(self, rest: int) -> None:
+        code, word = self._code, word_at(self._prepared.source, rest)
+        if code.startswith("(*", rest) and code.find("*)", rest) >= 0:
+            self._complaints.error(
+                "netlist-syntax",
+                "this attribute is not understood",
+                word,
+                'write it like `(* name = 1, other = "text" *)`',
+            )
+            return
+        opening = {"/*": "comment", "(*": "attribute"}.get(code[rest : rest + 2], "statement")
+        self._complaints.error(
+            "netlist-truncated",
+            f"the text ends within this {opening}",
+            word,
+            "close it, or write the file again if it was cut off",
+        )
 
 
 def _statements(code: str, start: int) -> Iterator[re.Match[str]]:

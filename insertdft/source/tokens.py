@@ -14,7 +14,9 @@ from typing import Final, NamedTuple
 NAME: Final = r"(?:[A-Za-z_][\w$]*+|\\\S++)"
 STRING: Final = r'"(?:[^"\\\n]++|\\(?s:.))*+"'
 COMMENT: Final = r"(?://[^\n]*+|/\*(?s:.*?)\*/)"
-ATTRIBUTE: Final = rf'\(\*(?!\s*+\))(?:[^"*]++|{STRING}|\*(?!\)))*+\*\)'
+_BLANKS = rf"(?:\s++|{COMMENT})*+"
+_SPECIFICATION = rf"{NAME}{_BLANKS}(?:={_BLANKS}(?:{STRING}|[\w'+\-{{}}]++){_BLANKS})?+"
+ATTRIBUTE: Final = rf"\(\*{_BLANKS}{_SPECIFICATION}(?:,{_BLANKS}{_SPECIFICATION})*+\*\)"
 #: White space, comments and attributes, as much as there is.
 GAP: Final = rf"(?:\s++|{COMMENT}|{ATTRIBUTE})*+"
 
@@ -84,13 +86,22 @@ def matching(words: list[Token], opening: int) -> int:
 
 def split_commas(words: list[Token]) -> list[list[Token]]:
     """Return the stretches between the commas that stand in no bracket."""
+    return split_at(words, ",")
+
+
+def split_at(words: list[Token], separator: str) -> list[list[Token]]:
+    """Return the stretches between the separators that stand in no bracket."""
     parts: list[list[Token]] = [[]]
     depth = 0
     for word in words:
         if word.kind == "operator":
             depth += (word.text in "([{") - (word.text in ")]}")
-        if depth == 0 and word.text == "," and word.kind == "operator":
+        if depth == 0 and word.text == separator and word.kind == "operator":
             parts.append([])
         else:
             parts[-1].append(word)
     return parts
+
+
+#: What makes a statement out of an expression, so that the grammar can read it.
+ASSIGN_HEAD: Final = tuple(tokens("assign x =", 0, 10, {}))

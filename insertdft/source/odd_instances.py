@@ -1,0 +1,86 @@
+"""Instances that the scanner's pattern does not answer, one statement at a time."""
+
+from collections.abc import Iterator
+from typing import Final
+
+from insertdft.netlist import PRIMITIVES
+from insertdft.source.by_grammar import ByGrammar
+from insertdft.source.draft import Draft, Row, by_position
+from insertdft.source.grammar import Node
+from insertdft.source.odd_statements import WRITE_OUT
+from insertdft.source.spelling import EMPTY
+from insertdft.source.tokens import Token, split_commas, tokens
+
+_X: Final = Token("name", "x", 0, 0)
+_X_WITHOUT_CONNECTIONS: Final = (_X, *tokens("();", 0, 3, {}))
+
+
+def read_instances(by: ByGrammar, before: int, start: int, end: int) -> list[Row]:
+    """Return the instances of one statement."""
+    words = by.words(start, end)
+    is_gate = words[0].text in PRIMITIVES
+    parameters = None
+    at = 1
+    if is_gate:
+        at = by.skip_strength_and_delay(words, at)
+    elif len(words) > 2 and words[1].text == "#":
+        at = by.closing(words, 2) + 1 if words[2].text == "(" else 3
+        parameters = by.code[words[1].start : words[at - 1].end]
+    # A gate may do without a name, also in a row with others that have one; the grammar wants
+    # all or none.
+    parts = split_commas(words[at:-1]) if is_gate else [words[at:-1]]
+    rows: list[Row] = []
+    for instance in _instances(by, words, parts):
+        if instance.array is not None:
+            by.refuse(instance.lineno, f"`{instance.name}` is an array of instances", WRITE_OUT)
+        name = instance.name
+        if not name and not is_gate:
+            by.no_verilog(words[at].start)
+        rows.append(Row(words[0].text, name, _body(by, instance), parameters, before, start, end))
+    return rows
+
+
+def _instances(by: ByGrammar, words: list[Token], parts: list[list[Token]]) -> Iterator[Node]:
+    for part in parts:
+        tree = by.parse([words[0], *_fill_empty(part), words[-1]])
+        if type(tree).__name__ != "InstanceList":
+            by.no_verilog(words[0].start)
+        yield from tree.instances
+
+
+def _body(by: ByGrammar, instance: Node) -> str:
+    ports = instance.portlist
+    texts = [by.spell(port.argname) or "" if port.argname else "" for port in ports]
+    if ports and ports[0].portname is None:
+        return by_position(["" if text == EMPTY else text for text in texts])
+    pins = [f".{port.portname} ({text})" for port, text in zip(ports, texts, strict=True)]
+    return ",".join(pins) + ")"
+
+
+def check_parameters(by: ByGrammar, draft: Draft) -> None:
+    """Complain about parameter overrides that are none; their values are of no interest."""
+    checked: set[str] = set()
+    starts = draft.starts
+    for instance, text in draft.parameters.items():
+        if text in checked:
+            continue
+        checked.add(text)
+        start = by.code.find(text, int(starts[instance]))
+        words = by.words(start, start + len(text))
+        if words[1].text == "(":
+            by.parse([_X, *words, *_X_WITHOUT_CONNECTIONS])
+
+
+def _fill_empty(words: list[Token]) -> list[Token]:
+    """Put a name into every empty place of a list by position; the grammar has no rule for them."""
+    filled: list[Token] = []
+    depth = 0
+    for at, word in enumerate(words):
+        is_end = word.text in (",", ")") and word.kind == "operator"
+        before = words[at - 1].text if at else ""
+        if depth == 1 and is_end and (before == "," or (before == "(" and word.text == ",")):
+            filled.append(Token("name", EMPTY, word.start, word.start))
+        if word.kind == "operator":
+            depth += (word.text in "([{") - (word.text in ")]}")
+        filled.append(word)
+    return filled
