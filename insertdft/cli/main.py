@@ -23,6 +23,7 @@ COMMANDS: Final[dict[str, str]] = {
     "convert": "Turn a netlist into one that can be tested by scan.",
     "survey": "Show the storage, clocks and resets of a netlist, and what keeps cells out.",
     "trace": "Walk the scan chains of any netlist and compare them with a description.",
+    "waves": "Draw the clock sequences of a chain description.",
     "demo": "Run the main job on a chip and a library that come with the tool.",
 }
 
@@ -64,10 +65,14 @@ def main() -> None:
     """
 
 
-def run() -> None:
-    """Run the command line and leave with an exit code; no traceback ever reaches the user."""
+def run(words: list[str] | None = None) -> None:
+    """Run the command line and leave with an exit code; no traceback ever reaches the user.
+
+    Args:
+        words: Arguments; those of the process by default.
+    """
     try:
-        code = main.main(standalone_mode=False, prog_name="insertdft")
+        code = main.main(words, standalone_mode=False, prog_name="insertdft")
         sys.exit(code if isinstance(code, int) else DONE)
     except click.exceptions.Exit as leave:
         sys.exit(leave.exit_code)
