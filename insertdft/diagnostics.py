@@ -93,6 +93,8 @@ SLUGS: Final[dict[str, str]] = {
     "chain-differs": "A scan chain is not what the chain description says",
     "chains-not-found": "No scan chain can be found in the netlist",
     "description-unreadable": "The chain description is not valid",
+    # compare
+    "timing-no-tables": "The library has no delay tables for the cells of the design",
     # writing
     "output-exists-as-input": "An output would overwrite an input",
     "output-unwritable": "An output cannot be written",
