@@ -91,6 +91,7 @@ class ByGrammar:
             at = closing + 1
         if words[at].text == "#":
             if words[at + 1].text != "(":
+                self._check_delay([words[at + 1]], words[at + 1])
                 return at + 2
             closing = self.closing(words, at + 1)
             for part in split_commas(words[at + 2 : closing]):

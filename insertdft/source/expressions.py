@@ -285,7 +285,7 @@ class _Concatenation:
         return inner * times
 
     def _operand(self) -> tuple[int, ...] | None:
-        text = "".join(self._operand_words())
+        text = " ".join(self._operand_words())
         if _PLAIN.match(text) is None and _SIZED.match(text) is None:
             if text.isdigit():
                 raise ExpressionError(
@@ -300,4 +300,4 @@ class _Concatenation:
         while self._peek() not in ("", "{", "}", ","):
             word = self._peek()
             self._at += 1
-            yield word + " " if word[0] == "\\" else word
+            yield word

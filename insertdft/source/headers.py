@@ -6,10 +6,10 @@ from typing import Final
 from insertdft.netlist import Header
 from insertdft.netlist.names import canonical
 from insertdft.source.by_grammar import ByGrammar
+from insertdft.source.declarations import DIRECTIONS
 from insertdft.source.draft import Draft
-from insertdft.source.grammar import Node
-from insertdft.source.odd_statements import declare_nodes
-from insertdft.source.tokens import NAME, Token, matching, split_commas
+from insertdft.source.odd_statements import Prefix, read_declared, split_prefix
+from insertdft.source.tokens import NAME, Token, split_commas
 
 _NAMES: Final = rf"{NAME}\s*+(?:,\s*+{NAME}\s*+)*+"
 _HEADER: Final = re.compile(
@@ -43,27 +43,25 @@ def _read_plain(draft: Draft, code: str, match: re.Match[str]) -> None:
 
 def _read_odd(by: ByGrammar, draft: Draft, start: int, end: int) -> None:
     words = by.words(start, end)
-    name = words[1] if len(words) > 1 and words[1].kind == "name" else None
-    draft.name = canonical(name.text) if name else ""
     words[0] = words[0]._replace(text="module")
+    if len(words) > 1 and words[1].kind == "name":
+        draft.name = canonical(words[1].text)
     opening = _port_list(by, words)
-    closing = by.closing(words, opening) if opening else -1
-    if opening:
-        words[opening + 1 : closing] = _unrename(by, draft, words[opening + 1 : closing])
-        closing = matching(words, opening)
-    tree = by.parse(words)
-    is_ansi = any(type(port).__name__ == "Ioport" for port in tree.ports)
+    closing = by.closing(words, opening) if opening else 0
+    ports = _Ports(by, draft)
+    names = ports.names(words[opening + 1 : closing]) if opening else []
+    tree = by.parse([*words[: opening + 1], *names, *words[closing:]] if opening else words)
     draft.header = Header(
-        ansi=is_ansi,
+        ansi=ports.is_ansi,
         list_end=words[closing].start if opening else None,
         list_empty=not tree.ports,
         end=end,
         name_end=words[1].end,
     )
+    draft.port_names = [(canonical(port.name), port.lineno) for port in tree.ports]
     for parameter in tree.paramlist.params:
         draft.parameter_names.update(canonical(item.name) for item in parameter.list)
-    for port in tree.ports:
-        _read_port(by, draft, port)
+    ports.declare()
 
 
 def _port_list(by: ByGrammar, words: list[Token]) -> int:
@@ -74,30 +72,47 @@ def _port_list(by: ByGrammar, words: list[Token]) -> int:
     return at if at < len(words) and words[at].text == "(" else 0
 
 
-def _unrename(by: ByGrammar, draft: Draft, words: list[Token]) -> list[Token]:
-    """Replace ports like ``.p(net)`` by ``net``; the grammar has no rule for them."""
-    changed: list[Token] = []
-    for part in split_commas(words):
-        if changed:
-            changed.append(Token("operator", ",", part[0].start if part else 0, 0))
+class _Ports:
+    """The ports of one list, each brought down to the name of its net.
+
+    Attributes:
+        is_ansi: Whether directions stand in the list.
+    """
+
+    def __init__(self, by: ByGrammar, draft: Draft) -> None:
+        self.is_ansi = False
+        self._by = by
+        self._draft = draft
+        self._declared: list[tuple[Prefix, list[Token]]] = []
+
+    def names(self, words: list[Token]) -> list[Token]:
+        """Return the list with nothing but names in it."""
+        names: list[Token] = []
+        for part in split_commas(words):
+            if names:
+                names.append(Token("operator", ",", names[-1].end, names[-1].end))
+            names += self._name(part)
+        return names
+
+    def declare(self) -> None:
+        """Enter what the list itself declares."""
+        for prefix, name in self._declared:
+            read_declared(self._by, self._draft, prefix, name)
+
+    def _name(self, part: list[Token]) -> list[Token]:
         if part and part[0].text == ".":
-            part = _renamed(by, draft, part)  # noqa: PLW2901
-        changed += part
-    return changed
-
-
-def _renamed(by: ByGrammar, draft: Draft, part: list[Token]) -> list[Token]:
-    if len(part) != 5 or part[3].kind != "name":
-        by.refuse(part[0].start, "this port is not one whole net", "name one net in the list")
-    draft.renamed[canonical(part[3].text)] = canonical(part[1].text)
-    return [part[3]]
-
-
-def _read_port(by: ByGrammar, draft: Draft, port: Node) -> None:
-    if type(port).__name__ != "Ioport":
-        draft.port_names.append((canonical(port.name), port.lineno))
-        return
-    first, second = port.first, port.second
-    draft.port_names.append((canonical(first.name), first.lineno))
-    kinds = [first] if second is None else [first, second]
-    declare_nodes(by, draft, kinds, "wire")
+            if len(part) != 5 or part[3].kind != "name":
+                fact = "this port is not one whole net"
+                self._by.refuse(part[0].start, fact, "name one net in the list")
+            self._draft.renamed[canonical(part[3].text)] = canonical(part[1].text)
+            return [part[3]]
+        if part and part[0].text in DIRECTIONS:
+            self.is_ansi = True
+            prefix, name = split_prefix(self._by, part)
+        elif self.is_ansi and self._declared:
+            # A name alone is declared like the port before it (IEEE 1364-2005, 12.3.4).
+            prefix, name = self._declared[-1][0], part
+        else:
+            return part
+        self._declared.append((prefix, name))
+        return name[:1]

@@ -48,7 +48,7 @@ _PLAIN_ESCAPED: Final = re.compile(r"\\[A-Za-z_][\w$]*+;", re.ASCII)
 def kept(names: Sequence[str]) -> Sequence[str]:
     """Return the kept spelling of many names, as ``canonical`` does for one."""
     if _PLAIN_ESCAPED.search(";".join(names) + ";"):
-        return list(map(canonical, names))
+        return [canonical(name) if name else name for name in names]
     return names
 
 

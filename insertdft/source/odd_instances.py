@@ -51,7 +51,7 @@ def _instances(by: ByGrammar, words: list[Token], parts: list[list[Token]]) -> I
 def _body(by: ByGrammar, instance: Node) -> str:
     ports = instance.portlist
     texts = [by.spell(port.argname) or "" if port.argname else "" for port in ports]
-    if ports and ports[0].portname is None:
+    if not ports or ports[0].portname is None:
         return by_position(["" if text == EMPTY else text for text in texts])
     pins = [f".{port.portname} ({text})" for port, text in zip(ports, texts, strict=True)]
     return ",".join(pins) + ")"

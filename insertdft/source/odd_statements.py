@@ -1,8 +1,8 @@
 """Declarations and assigns that the scanner's pattern does not answer."""
 
-from typing import Final
+from typing import Final, NamedTuple
 
-from insertdft.netlist.names import canonical
+from insertdft.netlist.names import KEYWORDS, canonical
 from insertdft.source.by_grammar import ByGrammar
 from insertdft.source.complaints import word_at
 from insertdft.source.declarations import DIRECTIONS, NET_KINDS, Declared, declare
@@ -31,74 +31,84 @@ def _assign(by: ByGrammar, draft: Draft, tree: Node, start: int) -> None:
 
 def read_declaration(by: ByGrammar, draft: Draft, words: list[Token]) -> None:
     """Read a declaration of nets or ports, with assignments in it or without."""
-    kind = next((word.text for word in words[:2] if word.text in NET_KINDS), None)
-    prefix, rest = _prefix(by, words)
+    prefix, rest = split_prefix(by, words)
     for part in split_commas(rest[:-1]):
-        tree = by.parse([*prefix, *part, rest[-1]])
-        nodes = list(tree.list)
-        assigns = [node for node in nodes if type(node).__name__ == "Assign"]
-        declare_nodes(by, draft, [node for node in nodes if node not in assigns], kind or "wire")
-        for node in assigns:
-            _assign(by, draft, node, words[0].start)
+        read_declared(by, draft, prefix, part)
 
 
-def _prefix(by: ByGrammar, words: list[Token]) -> tuple[list[Token], list[Token]]:
-    """Return what comes before the names as the grammar knows it, and the rest."""
+class Prefix(NamedTuple):
+    """What a declaration says before its names.
+
+    Attributes:
+        words: As the grammar knows it: every kind of net is a wire.
+        kind: The kind of net, None if it says none.
+    """
+
+    words: list[Token]
+    kind: str | None
+
+
+def split_prefix(by: ByGrammar, words: list[Token]) -> tuple[Prefix, list[Token]]:
+    """Return what comes before the names of a declaration, and the rest."""
     prefix: list[Token] = []
+    kind: str | None = None
     at = 0
     while at < len(words):
         word = words[at]
-        if word.text in NET_KINDS:
+        is_kind_place = at == 0 or (at == 1 and words[0].text in DIRECTIONS)
+        if (word.text in NET_KINDS or word.text == "reg") and is_kind_place:
+            kind = _kind(by, word)
             prefix.append(word._replace(text="wire"))
         elif word.text == "signed" or (word.text in DIRECTIONS and at == 0):
             prefix.append(word)
-        elif word.text == "[":
-            closing = by.closing(words, at)
-            prefix += words[at : closing + 1]
-            at = closing
-        elif word.text in ("#", "("):
-            behind = by.skip_strength_and_delay(words, at)
-            if behind == at:
-                by.no_verilog(word.start)
+        elif word.text in ("[", "#", "("):
+            behind = _behind_range_or_delay(by, words, at)
+            prefix += words[at:behind] if word.text == "[" else []
             at = behind - 1
         elif word.text not in ("vectored", "scalared"):
             break
         at += 1
-    if at >= len(words):
-        by.no_verilog(words[-1].start)
-    return prefix, words[at:]
+    if at >= len(words) or words[at].text in KEYWORDS:
+        by.no_verilog(words[min(at, len(words) - 1)].start)
+    return Prefix(prefix, kind), words[at:]
 
 
-def declare_nodes(by: ByGrammar, draft: Draft, nodes: list[Node], kind: str) -> None:
-    """Enter the declarations of the grammar; all nodes are about one name."""
-    direction: str | None = None
-    net: str | None = None
-    for node in nodes:
-        what = type(node).__name__.lower()
-        if what in DIRECTIONS:
-            direction = what
-        elif what == "reg":
-            by.complaints.error(
-                "netlist-behavioural",
-                f"`{node.name}` is a variable, not a net",
-                word_at(by.source, node.lineno),
-                "declare it as a wire",
-            )
-        else:
-            net = kind
-    head = nodes[0]
-    if head.dimensions is not None:
-        by.refuse(head.lineno, f"`{head.name}` is an array of nets", WRITE_OUT)
-    declared = Declared(
-        canonical(head.name), _name_offset(by, head), direction, net, _limits(by, head)
+def _behind_range_or_delay(by: ByGrammar, words: list[Token], at: int) -> int:
+    if words[at].text == "[":
+        return by.closing(words, at) + 1
+    behind = by.skip_strength_and_delay(words, at)
+    if behind == at:
+        by.no_verilog(words[at].start)
+    return behind
+
+
+def _kind(by: ByGrammar, word: Token) -> str:
+    if word.text != "reg":
+        return word.text
+    by.complaints.error(
+        "netlist-behavioural",
+        "a variable is declared (`reg`), not a net",
+        word_at(by.source, word.start),
+        "declare it as a wire",
     )
+    return "wire"
+
+
+def read_declared(by: ByGrammar, draft: Draft, prefix: Prefix, part: list[Token]) -> None:
+    """Enter one name of a declaration, with the assignment that may follow it."""
+    if not part:
+        by.no_verilog(prefix.words[-1].start)
+    tree = by.parse([*prefix.words, *part, Token("operator", ";", part[-1].end, part[-1].end)])
+    head = tree.list[0]
+    if head.dimensions is not None:
+        by.refuse(part[0].start, f"`{head.name}` is an array of nets", WRITE_OUT)
+    direction = prefix.words[0].text if prefix.words[0].text in DIRECTIONS else None
+    kind = prefix.kind if direction or prefix.kind else "wire"
+    declared = Declared(canonical(part[0].text), part[0].start, direction, kind, _limits(by, head))
     declare(draft, declared, by.complaints)
-
-
-def _name_offset(by: ByGrammar, node: Node) -> int:
-    # The grammar gives some declarations the place of their first word.
-    found = by.code.find(node.name, node.lineno)
-    return found if found >= 0 else node.lineno
+    for node in tree.list:
+        if type(node).__name__ == "Assign":
+            _assign(by, draft, node, part[0].start)
 
 
 def _limits(by: ByGrammar, node: Node) -> tuple[int, int] | None:

@@ -77,9 +77,10 @@ def prepare(source: SourceText, macros: Macros, complaints: Complaints) -> Prepa
 
 
 _LONE_RETURN: Final = re.compile(r"\r(?!\n)")
+#: The first three may hold accents that mean nothing.
 _ACCENT: Final = re.compile(
-    rf"{COMMENT}|{STRING}|\\\S++|`(?P<word>{NAME})?", re.ASCII
-)  # the first three may hold accents that mean nothing
+    rf"{COMMENT}|{STRING}|\\\S++|`(?P<word>{NAME})?|(?P<open>/\*)", re.ASCII
+)
 _LINE: Final = re.compile(r"(?:[^\n\\]++|\\(?s:.))*+")
 _ARGUMENT: Final = re.compile(rf"[ \t]*+({NAME})", re.ASCII)
 _NOT_LINE_END: Final = re.compile(r"[^\n]")
@@ -141,6 +142,9 @@ class _Reading:
             at = match.end()
             if match["word"] is not None:
                 at = self._directive(match["word"], match.start(), at)
+            elif match["open"]:
+                hint = "close it, or write the file again if it was cut off"
+                self._wrong("netlist-truncated", "a comment has no end", match.start(), at, hint)
             elif match[0] == "`":
                 self._wrong(
                     "directive-unknown",

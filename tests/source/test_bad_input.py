@@ -44,7 +44,7 @@ IN_A_MODULE = {
                  "netlist-behavioural", "4:1"),
     "specify": ("specify (a => y) = 1; endspecify\n", "netlist-behavioural", "4:1"),
     "reg": ("reg q;\n", "netlist-behavioural", "4:1"),
-    "output reg": ("output reg q;\n", "netlist-behavioural", "4:12"),
+    "output reg": ("output reg q;\n", "netlist-behavioural", "4:8"),
     "logic in an assign": ("assign y[0] = a & y[1];\n", "netlist-behavioural", "4:15"),
     "logic in a pin": ("INV u (.A(~a));\n", "netlist-behavioural", "4:11"),
     "choice in an assign": ("assign y = a ? 2'b01 : 2'b10;\n", "netlist-behavioural", "4:12"),
