@@ -30,8 +30,7 @@ def command(ctx: click.Context, out: Path) -> int:
     """
     with as_file(files("insertdft") / "demo") as folder:
         texts = {
-            name: (folder / name).read_text(encoding="latin-1")
-            for name in (CHIP, LIBRARY, MODELS)
+            name: (folder / name).read_text(encoding="latin-1") for name in (CHIP, LIBRARY, MODELS)
         }
     write_all(out, texts, [])
     words = ["--chains", "6", "--out", str(out / "scan")]

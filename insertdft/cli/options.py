@@ -21,10 +21,11 @@ def design_options(function: F) -> F:
     for decorate in reversed(
         (
             options_file,
-            click.argument("netlist", nargs=-1, type=click.Path(path_type=Path)),
+            click.argument("netlist", nargs=-1, required=True, type=click.Path(path_type=Path)),
             click.option(
                 "--lib",
                 multiple=True,
+                required=True,
                 type=click.Path(path_type=Path),
                 metavar="FILE",
                 help="Liberty file, or Verilog cell models. Repeat it for a kit of several files.",

@@ -188,13 +188,21 @@ class Design:
 
     @cached_property
     def drivers(self) -> "PinsOfNets":
-        """Output (and inout, unknown) pins of each net."""
-        return pins_of_nets(self, (OUTPUT, INOUT, UNKNOWN))
+        """Output and inout pins of each net; black-box pins where nothing else drives it."""
+        certain = (self.pin_direction == OUTPUT) & (self.pin_net >= 0)
+        is_driven = np.zeros(self.net_count, bool)
+        is_driven[self.pin_net[certain]] = True
+        is_driven[np.array(list(self.input_ports), np.int64)] = True
+        maybe = (self.pin_direction == UNKNOWN) & (self.pin_net >= 0)
+        maybe[maybe] = ~is_driven[self.pin_net[maybe]]
+        chosen = certain | maybe | (self.pin_direction == INOUT)
+        return pins_of_nets(self, np.flatnonzero(chosen & (self.pin_net >= 0)))
 
     @cached_property
     def loads(self) -> "PinsOfNets":
         """Input (and inout, unknown) pins of each net."""
-        return pins_of_nets(self, (INPUT, INOUT, UNKNOWN))
+        chosen = (self.pin_direction != OUTPUT) & (self.pin_net >= 0)
+        return pins_of_nets(self, np.flatnonzero(chosen))
 
     @cached_property
     def port_nets(self) -> Mapping[str, int]:
@@ -234,9 +242,8 @@ class PinsOfNets:
         return found
 
 
-def pins_of_nets(design: Design, directions: tuple[int, ...]) -> PinsOfNets:
-    """Return the pins with one of ``directions`` by net, rows of a net in ascending order."""
-    chosen = np.flatnonzero(np.isin(design.pin_direction, directions) & (design.pin_net >= 0))
+def pins_of_nets(design: Design, chosen: Offsets) -> PinsOfNets:
+    """Return the chosen pin rows by net, those of a net in ascending order."""
     nets = design.pin_net[chosen]
     order = np.argsort(nets, kind="stable")
     counts = np.bincount(nets, minlength=design.net_count)

@@ -1,7 +1,7 @@
 """Netlist + library -> ``Design``: give every pin a direction and open the hierarchy.
 
 Ports, ``assign`` aliases and supply nets are merged into single nets here, once, so that no later
-stage has to follow them. Merging is by connected components (scipy), constants last.
+stage has to follow them. Constants are merged last.
 """
 
 from collections.abc import Iterable
@@ -9,8 +9,6 @@ from typing import Final, NamedTuple, TypeVar
 
 import numpy as np
 import numpy.typing as npt
-from scipy.sparse import coo_array
-from scipy.sparse.csgraph import connected_components
 
 from insertdft.design.drivers import find_double_drivers
 from insertdft.design.flat import Design, Occurrence, TopPort
@@ -195,15 +193,20 @@ def _merge_nets(opened: _Opened) -> Ids:
 
 
 def _merge(net_of: Ids, low: Ids, high: Ids) -> None:
-    if len(low) == 0:
-        return
-    nodes, flat = np.unique(np.concatenate((low, high)), return_inverse=True)
-    left, right = flat[: len(low)], flat[len(low) :]
-    graph = coo_array((np.ones(len(low), np.int8), (left, right)), shape=(len(nodes),) * 2)
-    _, part = connected_components(graph, directed=False)
-    lowest = np.full(int(part.max()) + 1, np.iinfo(np.int32).max, np.int32)
-    np.minimum.at(lowest, part, nodes)
-    net_of[nodes] = lowest[part]
+    """Give the nets that aliases connect, directly or through others, their lowest id.
+
+    Each round hooks the higher of two roots under the lower and then halves all paths, so the
+    rounds grow with the logarithm of the longest row of aliases.
+    """
+    while True:
+        left, right = net_of[low], net_of[high]
+        differ = left != right
+        if not differ.any():
+            return
+        left, right = left[differ], right[differ]
+        np.minimum.at(net_of, np.maximum(left, right), np.minimum(left, right))
+        while (net_of[net_of] != net_of).any():
+            net_of[:] = net_of[net_of]
 
 
 def _tie(net_of: Ids, constants: Ids, nets: Ids) -> Ids:

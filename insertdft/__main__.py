@@ -1,0 +1,5 @@
+"""``python -m insertdft``."""
+
+from insertdft.cli.main import run
+
+run()
