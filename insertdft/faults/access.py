@@ -38,7 +38,7 @@ def full_access(circuit: Circuit, held: Mapping[str, int]) -> Access:
 
     Args:
         circuit: Made without clocks.
-        held: Input port bits that keep a value.
+        held: Input port bits that keep a value, beside the clocks that the circuit pulses.
     """
     everything = np.ones(len(circuit.states.slot), np.bool_)
     return _access(circuit, everything, everything, held)
@@ -56,7 +56,7 @@ def scan_access(
         circuit: Made without clocks.
         control: Leaf instances whose states are known after loading (LSSD: L1 and L2).
         observe: Leaf instances whose states are unloaded after capture (LSSD: L1).
-        held: Input port bits that keep a value.
+        held: Input port bits that keep a value, beside the clocks that the circuit pulses.
 
     Raises:
         KeyError: ``held`` names no input port bit.
@@ -72,7 +72,7 @@ def scan_access(
 
 def _access(circuit: Circuit, control: Flags, observe: Flags, held: Mapping[str, int]) -> Access:
     states = circuit.states
-    kept = {circuit.inputs[name]: value for name, value in held.items()}
+    kept = {circuit.inputs[name]: value for name, value in ({**circuit.at_rest, **held}).items()}
     ports = [slot for slot in circuit.inputs.values() if slot not in kept]
     is_read = np.zeros(circuit.slots, np.bool_)
     is_read[circuit.edge_slot] = True

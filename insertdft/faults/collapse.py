@@ -20,7 +20,7 @@ from insertdft.library.cell import Cell
 from insertdft.library.expression import And, Expression, Not, Or, Var, columns, evaluate, variables
 from insertdft.netlist import Ids
 from insertdft.simulate.circuit import Circuit
-from insertdft.simulate.lower import storages
+from insertdft.simulate.lowering import storages
 from insertdft.simulate.pin_rows import PinRows, pins_by_cell
 
 #: Functions of more inputs are not tabulated; gates of any width are known by their form.

@@ -10,11 +10,9 @@ from dataclasses import dataclass, field
 
 import numpy as np
 
-from insertdft.library.expression import variables
 from insertdft.netlist import FIRST_NET, Ids, Offsets
 from insertdft.simulate.circuit import Circuit
-from insertdft.simulate.lower import storages
-from insertdft.simulate.pin_rows import pins_by_cell
+from insertdft.simulate.lower import clock_nets, leads_to
 from insertdft.simulate.words import Flags
 
 STEM, PIN, PORT, BLIND = 0, 1, 2, 3
@@ -104,42 +102,12 @@ def _reading_edges(circuit: Circuit) -> Offsets:
     ends = np.zeros(circuit.slots, np.bool_)
     ends[list(circuit.outputs.values())] = True
     ends[circuit.states.following] = True
-    to_logic = _leads_to(circuit, ends)
+    to_logic = leads_to(circuit, ends)
     clocks = np.zeros(circuit.slots, np.bool_)
-    clocks[circuit.slot_of_net[_clock_nets(circuit)]] = True
-    only_clock = _leads_to(circuit, clocks) & ~to_logic
+    clocks[circuit.slot_of_net[clock_nets(circuit.design)]] = True
+    only_clock = leads_to(circuit, clocks) & ~to_logic
     kept: Offsets = np.flatnonzero((circuit.edge_row >= 0) & ~only_clock[circuit.edge_node])
     return kept
-
-
-def _leads_to(circuit: Circuit, ends: Flags) -> Flags:
-    """Return the slots from which one of ``ends`` is reached, themselves included."""
-    found = ends.copy()
-    for group in reversed(circuit.groups):
-        leading = found[group.first : group.end]
-        for slots in group.inputs:
-            found[slots[leading]] = True
-    return found
-
-
-def _clock_nets(circuit: Circuit) -> Ids:
-    """Return the nets at clock pins of storage cells, ascending."""
-    design = circuit.design
-    found = np.zeros(design.net_count, np.bool_)
-    for pins in pins_by_cell(
-        design.cell, design.pin_start, design.pin_name, design.pin_names, len(design.cells)
-    ):
-        cell = design.cells[pins.cell]
-        names = {
-            name
-            for storage in (storages(cell) if cell else ())
-            for name in (variables(storage.clock) if storage.clock is not None else ())
-        }
-        for name in sorted(names & pins.rows.keys()):
-            rows = pins.rows[name]
-            nets = design.pin_net[rows[rows >= 0]]
-            found[nets[nets >= FIRST_NET]] = True
-    return np.flatnonzero(found).astype(np.int32)
 
 
 def _blind_rows(circuit: Circuit) -> Ids:

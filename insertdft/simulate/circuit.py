@@ -93,6 +93,8 @@ class Circuit:
             floating buses, cut loops.
         inputs: Name of an input (or inout) port bit -> its slot.
         outputs: Name of an output (or inout) port bit -> its slot.
+        at_rest: Clock port bits that pulse at a capture, and their off values; empty where clocks
+            are taken to arrive at every state.
         loops: Instances of each combinational loop.
         unmodelled: Instances whose outputs nothing describes (black boxes among them).
     """
@@ -113,6 +115,7 @@ class Circuit:
     unknown: Ids = field(repr=False)
     inputs: Mapping[str, int] = field(repr=False)
     outputs: Mapping[str, int] = field(repr=False)
+    at_rest: Mapping[str, int]
     loops: tuple[tuple[int, ...], ...]
     unmodelled: tuple[int, ...]
 

@@ -18,7 +18,7 @@ import numpy as np
 from insertdft.library import Arc, Cell, Pin, StorageKind, Table
 from insertdft.library.expression import variables
 from insertdft.netlist import FIRST_NET, Ids, Offsets
-from insertdft.simulate.lower import storages
+from insertdft.simulate.lowering import storages
 from insertdft.simulate.pin_rows import PinRows, pins_by_cell
 from insertdft.timing.tables import Floats, Stack, Stacker
 from insertdft.timing.wiring import Wiring
