@@ -2,7 +2,7 @@
 
 from collections.abc import Iterable, Mapping, Sequence
 from functools import lru_cache
-from typing import Final
+from typing import Final, NamedTuple
 
 from insertdft.library.expression import (
     And,
@@ -98,19 +98,55 @@ def from_table(table: int, names: Sequence[str], care: int | None = None) -> Exp
         names: Variable i is bit i of the pattern.
         care: Patterns whose value matters; the rest is chosen so that few variables remain.
     """
-    count = len(names)
-    ones = (1 << (1 << count)) - 1
+    ones = (1 << (1 << len(names))) - 1
     care = ones if care is None else care & ones
-    table &= care
-    for bit, mask in enumerate(columns(count)):
-        # A variable goes if both halves agree wherever both matter.
-        step = 1 << bit
-        high, low = (table & mask) >> step, table & (mask >> step)
-        care_high, care_low = (care & mask) >> step, care & (mask >> step)
-        if (high ^ low) & care_high & care_low == 0:
-            merged, cared = high | low, care_high | care_low
-            table, care = merged | merged << step, cared | cared << step
-    return _shannon(table, care, list(names), ones)
+    part = _Part(table & care, care, tuple(zip(names, columns(len(names)), strict=True)))
+    return _expressed(part)
+
+
+class _Part(NamedTuple):
+    """A function where it matters, over (name, column) pairs of the variables still looked at."""
+
+    table: int
+    care: int
+    over: tuple[tuple[str, int], ...]
+
+
+def _halves(part: _Part, place: int) -> tuple[_Part, _Part]:
+    """Return the cofactors for 0 and 1 of the variable at ``place``, without that variable."""
+    column = part.over[place][1]
+    step = column & -column  # the distance between two patterns that differ in the variable
+    step = step.bit_length() - 1
+    rest = part.over[:place] + part.over[place + 1 :]
+    low, low_care = part.table & ~column, part.care & ~column
+    high, high_care = part.table & column, part.care & column
+    return (
+        _Part(low | low << step, low_care | low_care << step, rest),
+        _Part(high | high >> step, high_care | high_care >> step, rest),
+    )
+
+
+def _needed(part: _Part) -> _Part:
+    """Return the part without the variables that need not matter."""
+    for place in reversed(range(len(part.over))):
+        low, high = _halves(part, place)
+        if (low.table ^ high.table) & low.care & high.care == 0:
+            part = _Part(low.table | high.table, low.care | high.care, low.over)
+    return part
+
+
+def _expressed(part: _Part) -> Expression:
+    """Split by the variable that leaves the simplest halves, again and again."""
+    part = _needed(part)
+    if part.table == 0:
+        return Const(False)
+    if part.table == part.care:
+        return Const(True)
+    splits = [tuple(map(_needed, _halves(part, place))) for place in range(len(part.over))]
+    sizes = [len(low.over) + len(high.over) for low, high in splits]
+    best = sizes.index(min(sizes))
+    low, high = splits[best]
+    return choose(Var(part.over[best][0]), _expressed(high), _expressed(low))
 
 
 def within(function: Expression, condition: Expression) -> Expression:
@@ -120,20 +156,6 @@ def within(function: Expression, condition: Expression) -> Expression:
         return function
     table, care = truth_table(function, names), truth_table(condition, names)
     return pruned(from_table(table, names, care))
-
-
-def _shannon(table: int, care: int, names: list[str], ones: int) -> Expression:
-    if table & care == 0:
-        return Const(False)
-    if table & care == care & ones:
-        return Const(True)
-    bit = len(names) - 1
-    half = 1 << (1 << bit)
-    low_ones = half - 1
-    rest = names[:bit]
-    when0 = _shannon(table & low_ones, care & low_ones, rest, low_ones)
-    when1 = _shannon(table >> (1 << bit), care >> (1 << bit), rest, low_ones)
-    return choose(Var(names[bit]), when1, when0)
 
 
 def choose(select: Expression, when1: Expression, when0: Expression) -> Expression:

@@ -9,6 +9,7 @@ pulse brings the mission next state. A clock acts on its first edge away from re
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, replace
 from itertools import product
+from typing import NamedTuple
 
 from insertdft.library.cell import Cell, ScanOutput, ScanRole, Storage, Style
 from insertdft.library.declared import only_pin, test_only_outputs
@@ -27,6 +28,20 @@ class _Claim:
     clocks: tuple[str, ...]
     mission: Storage
     outputs: tuple[str, ...]
+
+
+class _Run(NamedTuple):
+    """What some pulses did.
+
+    Attributes:
+        inputs: At rest.
+        before: Nodes at rest.
+        after: Nodes right after the last leading edge.
+    """
+
+    inputs: Mapping[str, int]
+    before: Mapping[str, Value]
+    after: Mapping[str, Value]
 
 
 def table_role(cell: Cell) -> ScanRole | None:
@@ -114,17 +129,24 @@ def _shift_outputs(
     cell: Cell, claim: _Claim, model: TableModel, rest: Mapping[str, int], held: Mapping[str, int]
 ) -> tuple[ScanOutput, ...]:
     """Return the outputs that show scan-in after the shift pulses, those for scan alone first."""
-    runs = _runs(model, claim.clocks, rest, held)
-    found = [
-        ScanOutput(name, inverted, name in test_only_outputs(cell))
+    only = test_only_outputs(cell)
+    found = _following(cell, claim, _runs(model, claim.clocks, rest, held))
+    # What shows scan-in before the last pulse already is L1, and L2 is to be shown.
+    early = _following(cell, claim, _runs(model, claim.clocks[:-1], rest, held))
+    last = {name: turned for name, turned in found.items() if name not in early} or found
+    outputs = [ScanOutput(name, turned, name in only) for name, turned in last.items()]
+    return tuple(sorted(outputs, key=lambda item: not item.test_only))
+
+
+def _following(cell: Cell, claim: _Claim, runs: Sequence[_Run]) -> dict[str, bool]:
+    """Return the outputs that equal scan-in (False) or its inverse (True) in all runs."""
+    return {
+        name: inverted
         for name in claim.outputs
         for inverted in (False, True)
         if (function := cell.pins[name].function) is not None
-        and all(
-            _shown(function, nodes) == inputs[claim.scan_in] ^ inverted for inputs, nodes, _ in runs
-        )
-    ]
-    return tuple(sorted(found, key=lambda item: not item.test_only))
+        and all(_shown(function, run.after) == run.inputs[claim.scan_in] ^ inverted for run in runs)
+    }
 
 
 def _relative(cell: Cell, outputs: tuple[ScanOutput, ...]) -> tuple[tuple[ScanOutput, ...], bool]:
@@ -162,16 +184,16 @@ def _captures(
     if mission.clock_also is not None:
         pulses += support(mission.clock_also)
     pulses = [name for name in pulses if name in rest]
-    for inputs, nodes, before in _runs(model, pulses, rest, held):
-        state = _mission_state(cell, before)
-        values = {**inputs, mission.state: state, mission.state_inverted: 1 - state}
+    for run in _runs(model, pulses, rest, held):
+        state = _mission_state(cell, run.before)
+        values = {**run.inputs, mission.state: state, mission.state_inverted: 1 - state}
         state = evaluate(mission.data, values, 1)
         for name in test.functions:
             inverse, shows = _mission_inverse(cell, name), cell.pins[name].function
             if (
                 inverse is not None
                 and shows is not None
-                and _shown(shows, nodes) != state ^ inverse
+                and _shown(shows, run.after) != state ^ inverse
             ):
                 return False
     return True
@@ -189,13 +211,10 @@ def _mission_state(cell: Cell, nodes: Mapping[str, Value]) -> int:
 
 def _runs(
     model: TableModel, clocks: Sequence[str], rest: Mapping[str, int], held: Mapping[str, int]
-) -> list[tuple[dict[str, int], dict[str, Value], dict[str, Value]]]:
-    """Pulse ``clocks`` one after another for all data and states: (inputs, nodes after, before).
-
-    The nodes are those right after the last leading edge.
-    """
+) -> list[_Run]:
+    """Pulse ``clocks`` one after another, for all data and from all states."""
     free = [name for name in model.inputs if name not in rest and name not in held]
-    found = []
+    found: list[_Run] = []
     for data in patterns(free):
         for before in patterns(model.nodes):
             idle = {**held, **data, **rest}
@@ -205,7 +224,7 @@ def _runs(
                 on = {**idle, clock: 1 - idle[clock]}
                 after = model.settle(idle, on, nodes)
                 nodes = model.settle(on, idle, after)
-            found.append((idle, after, start))
+            found.append(_Run(idle, start, after))
     return found
 
 

@@ -55,6 +55,47 @@ def table_storages(table: StateTable) -> tuple[Storage, ...]:
     return storages_of(TableModel(table), edge_inputs(table))
 
 
+class _Mask(NamedTuple):
+    """A row as bit masks over inputs and over nodes.
+
+    Attributes:
+        cared: Inputs whose level matters.
+        level: Their level.
+        rise: Inputs that must rise; ``fall`` those that must fall.
+        fall: See ``rise``.
+        no_rise: Inputs that must not rise; ``no_fall`` those that must not fall.
+        no_fall: See ``no_rise``.
+        nodes: Nodes whose value matters; it must then be known.
+        state: Their value.
+    """
+
+    cared: int
+    level: int
+    rise: int
+    fall: int
+    no_rise: int
+    no_fall: int
+    nodes: int
+    state: int
+
+
+def _mask(row: Row) -> _Mask:
+    def where(tokens: tuple[str, ...], *wanted: str) -> int:
+        return sum(1 << place for place, token in enumerate(tokens) if token in wanted)
+
+    inputs, current = row.inputs, row.current
+    return _Mask(
+        where(inputs, "L", "H"),
+        where(inputs, "H"),
+        where(inputs, "R"),
+        where(inputs, "F"),
+        where(inputs, "~R"),
+        where(inputs, "~F"),
+        where(current, "L", "H"),
+        where(current, "H"),
+    )
+
+
 class TableModel:
     """A state table ready to be stepped."""
 
@@ -62,7 +103,7 @@ class TableModel:
         """Expand the rows once."""
         self.inputs = table.inputs
         self.nodes = table.nodes
-        self._rows = expanded_rows(table)
+        self._rows = [(_mask(row), row.following) for row in expanded_rows(table)]
 
     def step(
         self, before: Mapping[str, int], after: Mapping[str, int], nodes: Mapping[str, Value]
@@ -74,9 +115,12 @@ class TableModel:
             after: Value of each input from now on.
             nodes: Value of each node until now, None for unknown.
         """
-        for row in self._rows:
-            if self._matches(row, before, after, nodes):
-                pairs = zip(self.nodes, row.following, strict=True)
+        old, new = _bits(self.inputs, before), _bits(self.inputs, after)
+        known = sum(1 << place for place, n in enumerate(self.nodes) if nodes[n] is not None)
+        state = sum(1 << place for place, n in enumerate(self.nodes) if nodes[n])
+        for mask, following in self._rows:
+            if _matches(mask, old, new, known, state):
+                pairs = zip(self.nodes, following, strict=True)
                 return {name: _following(token, nodes[name]) for name, token in pairs}
         return dict.fromkeys(self.nodes)
 
@@ -92,29 +136,24 @@ class TableModel:
             found = following
         return dict.fromkeys(self.nodes)
 
-    def _matches(
-        self,
-        row: Row,
-        before: Mapping[str, int],
-        after: Mapping[str, int],
-        nodes: Mapping[str, Value],
-    ) -> bool:
-        inputs = zip(self.inputs, row.inputs, strict=True)
-        current = zip(self.nodes, row.current, strict=True)
-        return all(_input_fits(token, before[name], after[name]) for name, token in inputs) and all(
-            _node_fits(token, nodes[name]) for name, token in current
-        )
+
+def _bits(names: tuple[str, ...], values: Mapping[str, int]) -> int:
+    word = 0
+    for place, name in enumerate(names):
+        word |= values[name] << place
+    return word
 
 
-def _input_fits(token: str, before: int, after: int) -> bool:
-    if token in ("L", "H"):
-        return after == (token == "H")
-    rose, fell = (before, after) == (0, 1), (before, after) == (1, 0)
-    return {"R": rose, "F": fell, "~R": not rose, "~F": not fell}.get(token, True)
-
-
-def _node_fits(token: str, value: Value) -> bool:
-    return value == (token == "H") if token in ("L", "H") else True
+def _matches(mask: _Mask, old: int, new: int, known: int, state: int) -> bool:
+    rose, fell = new & ~old, old & ~new
+    return (
+        new & mask.cared == mask.level
+        and rose & mask.rise == mask.rise
+        and fell & mask.fall == mask.fall
+        and not (rose & mask.no_rise or fell & mask.no_fall)
+        and mask.nodes & known == mask.nodes
+        and state & mask.nodes == mask.state
+    )
 
 
 def _following(token: str, value: Value) -> Value:

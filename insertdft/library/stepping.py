@@ -6,6 +6,7 @@ nothing.
 """
 
 from collections.abc import Iterator, Mapping, Sequence
+from dataclasses import replace
 from itertools import product
 from typing import Final, NamedTuple, Protocol
 
@@ -194,40 +195,63 @@ def _latch(box: Steps, node: str, rests: list[_Rest]) -> Storage | None:
 
 
 def _follower(box: Steps, node: str, rests: list[_Rest]) -> Storage | None:
-    """Return the latch that takes the state of another node (or its inverse) while it is open."""
-    driven: list[tuple[int, _Rest]] = []
-    kept = 0
-    for pattern, rest in enumerate(rests):
-        if all(after[node] is None for _, after in rest.outcomes):
-            continue
-        if all(before[node] == after[node] for before, after in rest.outcomes):
-            kept |= 1 << pattern
-        else:
-            driven.append((pattern, rest))
-    opened = sum(1 << pattern for pattern, _ in driven)
-    enable = pruned(from_table(opened, box.inputs, opened | kept))
+    """Return the latch that a node is while it also takes the state of another node."""
+    forced: dict[int, list[Expression]] = {0: [], 1: []}
+    together: tuple[str | None, str | None] = (None, None)
+    while (found := _forcing_pin(box, node, rests)) is not None:
+        name, level, value = found
+        rests = [rest for rest in rests if rest.inputs[name] != level]
+        if any(forced.values()) and not forced[value]:
+            together = ("L", "H") if value else ("H", "L")
+        forced[value].append(Var(name) if level else Not(Var(name)))
     for other in box.nodes:
-        for inverted in (0, 1):
-            if other != node and _follows(node, other, inverted, [rest for _, rest in driven]):
-                data: Expression = Not(Var(other)) if inverted else Var(other)
-                return Storage(StorageKind.LATCH, node, f"!{node}", 1, data, enable)
+        latch = None if other == node else _beside(box, node, other, rests)
+        if latch is not None:
+            clear, preset = _any(forced[0]), _any(forced[1])
+            return replace(latch, clear=clear, preset=preset, clear_preset=together)
     return None
 
 
-def _follows(node: str, other: str, inverted: int, rests: list[_Rest]) -> bool:
-    return all(
-        after[other] is not None and after[node] == (after[other] or 0) ^ inverted
-        for rest in rests
-        for _, after in rest.outcomes
-    )
+def _forcing_pin(box: Steps, node: str, rests: list[_Rest]) -> tuple[str, int, int] | None:
+    """Return a pin, its level and the value that it alone forces on a node, or None."""
+    for name, level in product(box.inputs, (0, 1)):
+        values = {
+            after[node]
+            for rest in rests
+            if rest.inputs[name] == level
+            for _, after in rest.outcomes
+        }
+        if values in ({0}, {1}) and len({rest.inputs[name] for rest in rests}) == 2:
+            return name, level, values.pop() or 0
+    return None
+
+
+def _beside(box: Steps, node: str, other: str, rests: list[_Rest]) -> Storage | None:
+    """Return the latch that a node is over the inputs and the state of ``other`` at rest."""
+    names = [*box.inputs, other, node]
+    ones = care = 0
+    for rest in rests:
+        for before, after in rest.outcomes:
+            beside, value = after[other], after[node]
+            if beside is None or value is None:
+                continue
+            own = {**rest.inputs, other: beside, node: before[node]}
+            place = sum(own[name] << bit for bit, name in enumerate(names))
+            if care >> place & 1 and (ones >> place & 1) != value:
+                return None
+            care |= 1 << place
+            ones |= value << place
+    return latch_of(from_table(ones, names, care), node, f"!{node}", ())
 
 
 def _flip_flop(box: Steps, clock: str) -> Storage | None:
     """Return the flip-flop that a box with one node and one edge is."""
     [node] = box.nodes
     forced: dict[int, int] = {0: 0, 1: 0}
+    care = 0
     for pattern, own in enumerate(patterns(box.inputs)):
         values = {box.settle(own, own, {node: value})[node] for value in (0, 1)}
+        care |= (values != {None}) << pattern
         if values in ({0}, {1}):
             forced[values.pop() or 0] |= 1 << pattern
     held = forced[0] | forced[1]
@@ -236,18 +260,18 @@ def _flip_flop(box: Steps, clock: str) -> Storage | None:
         if data is None or not _keeps(box, clock, held, rising=not rising):
             continue
         edge: Expression = Var(clock) if rising else Not(Var(clock))
-        clear, preset, both = _asynchronous(box, forced)
+        clear, preset, both = _asynchronous(box, forced, care)
         kind, name = StorageKind.FLIP_FLOP, f"!{node}"
         return Storage(kind, node, name, 1, data, edge, None, clear, preset, both)
     return None
 
 
 def _asynchronous(
-    box: Steps, forced: Mapping[int, int]
+    box: Steps, forced: Mapping[int, int], care: int
 ) -> tuple[Expression | None, Expression | None, tuple[str | None, str | None]]:
     """Return clear, preset and what both do, as single pins where they are."""
     [node] = box.nodes
-    low, high = (from_table(forced[value], box.inputs) for value in (0, 1))
+    low, high = (from_table(forced[value], box.inputs, care) for value in (0, 1))
     at_rest = choose(high, Const(True), choose(low, Const(False), Var(node)))
     found = take_out_forced(pruned(at_rest), box.inputs)
     if found.rest == Var(node):

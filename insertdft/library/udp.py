@@ -152,24 +152,63 @@ class _Box:
         # Level-sensitive rows come before edge-sensitive ones (IEEE 1364-2005, 8.6).
         self._levels = [row for row in rows if row.edge is None]
         self._edges = [row for row in rows if row.edge is not None]
+        self._rests: dict[str, tuple[Value, Value]] = {}
 
     def settle(
         self, before: Mapping[str, int], after: Mapping[str, int], nodes: Mapping[str, Value]
     ) -> dict[str, Value]:
         state = nodes[STATE]
-        moved = [i for i, name in enumerate(self.inputs) if before[name] != after[name]]
-        if len(moved) > 1 or state is None:
+        old = "".join(str(before[name]) for name in self.inputs)
+        new = "".join(str(after[name]) for name in self.inputs)
+        if state is None:
             return {STATE: None}
-        old = [str(before[name]) for name in self.inputs]
-        new = [str(after[name]) for name in self.inputs]
-        rows = [*self._levels, *(row for row in self._edges if moved and row.edge == moved[0])]
+        if old == new:
+            return {STATE: self._rest(new)[state]}
+        return {STATE: self._moved(old, new, state)}
+
+    def _moved(self, old: str, new: str, state: int) -> Value:
+        """Return the state after one input changed; None if no row speaks of it."""
+        moved = [place for place in range(len(new)) if old[place] != new[place]]
+        if len(moved) != 1:
+            return None
+        rows = [*self._levels, *(row for row in self._edges if row.edge == moved[0])]
         for row in rows:
             if _fits(row, old, new, str(state)):
-                return {STATE: state if row.following == "-" else int(row.following)}
-        return {STATE: None if moved else state}
+                return state if row.following == "-" else int(row.following)
+        return None
+
+    def _rest(self, values: str) -> tuple[Value, Value]:
+        """Return the state at rest, coming from state 0 and from state 1.
+
+        Where no level-sensitive row decides, what the edges that lead here agree on does: some
+        primitives write a latch as the edges of its data and of its enable.
+        """
+        if values not in self._rests:
+            self._rests[values] = (self._still(values, 0), self._still(values, 1))
+        return self._rests[values]
+
+    def _still(self, values: str, state: int) -> Value:
+        for row in self._levels:
+            if _fits(row, values, values, str(state)):
+                return state if row.following == "-" else int(row.following)
+        arrivals = {
+            (before, self._moved(_turned(values, place), values, before))
+            for place in range(len(values))
+            for before in (0, 1)
+        }
+        known = {(before, after) for before, after in arrivals if after is not None}
+        if not known:
+            return None
+        ends = {after for _, after in known}
+        return ends.pop() if len(ends) == 1 and {b for b, _ in known} == {0, 1} else state
 
 
-def _fits(row: Row, old: list[str], new: list[str], state: str) -> bool:
+def _turned(values: str, place: int) -> str:
+    other = "1" if values[place] == "0" else "0"
+    return values[:place] + other + values[place + 1 :]
+
+
+def _fits(row: Row, old: str, new: str, state: str) -> bool:
     if state not in _values(row.state):
         return False
     return all(

@@ -14,6 +14,7 @@ import pytest
 from kits import OSU, osu, source
 from outside import outside
 
+import insertdft
 from insertdft.library import (
     Library,
     StorageKind,
@@ -35,6 +36,7 @@ from insertdft.library.expression import Not, Var, parse_expression
 from insertdft.library.functions import same
 from insertdft.text import SourceText
 
+DEMO = Path(insertdft.__file__).parent / "demo"
 IHP_LIB = ("libs", "ihp-sg13g2", "sg13g2_stdcell_typ_1p20V_25C.lib")
 IHP_MODELS = ("sg13g2_udp.v", "sg13g2_stdcell.v")
 SKY = "sky130_fd_sc_hd__"
@@ -370,3 +372,60 @@ def test_second_reader_of_liberty_agrees(name: str) -> None:
                 expression = pairs[attribute]
                 assert expression is not None
                 assert same(expression, parse_expression(text))
+
+
+@cache
+def demo() -> Library:
+    return read_library([source(DEMO / "demo.lib")])
+
+
+def test_demo_library_has_a_twin_of_every_style_for_every_flip_flop() -> None:
+    plain = [
+        cell.name
+        for cell in demo().cells.values()
+        if cell.is_storage and not cell.scan and cell.storage[0].kind is StorageKind.FLIP_FLOP
+        if len(cell.storage) == 1
+    ]
+
+    assert len(plain) == 11
+    for name in plain:
+        kind, _, drive = name.removeprefix("flop_").rpartition("w")
+        stems = {
+            Style.MUX_D: "scan_flop", Style.CLOCKED_SCAN: "two_clock_flop", Style.LSSD: "srl_edge",
+        }  # fmt: skip
+        for style, stem in stems.items():
+            found = scan_twins(demo(), name, style)
+            assert found[0].cell == f"{stem}_{kind}w{drive}"
+            assert not found[0].ties
+            cells = demo().cells
+            assert all(check_twin(cells[name], cells[twin.cell], twin) for twin in found)
+    assert demo().diagnostics == ()
+
+
+def test_demo_shift_register_latches_are_read() -> None:
+    roles = {name: cell.scan[0] for name, cell in demo().cells.items() if name.startswith("srl")}
+
+    assert all(role.style is Style.LSSD for role in roles.values())
+    shown = {name: [out.pin for out in role.outputs] for name, role in roles.items()}
+    assert shown["srl_first_w1"] == ["L1", "L1N"]
+    assert shown["srl_single_w1"] == ["L2"]
+    assert shown["srl_double_r_w1"] == ["L2", "L2N"]
+    assert shown["srl_star_w1"] == ["L2"]
+    star = roles["srl_star_w1"]
+    assert (star.data, star.clock, star.data_2, star.clock_2) == ("D", "C", "D2", "C2")
+    assert demo().cells["scan_bank4_w1"].scan[0].bits == 4
+    latch = scan_twins(demo(), "latch_w1", Style.LSSD)
+    assert [twin.cell for twin in latch[:2]] == ["srl_first_w1", "srl_single_w1"]
+    assert scan_twins(demo(), "latch_low_w1", Style.LSSD) == ()
+
+
+def test_demo_models_agree_with_liberty() -> None:
+    models = read_models([source(DEMO / "demo_cells.v")])
+
+    unclear = {item.message.split("`")[1] for item in models.diagnostics}
+    differ = set(agreement(demo(), models)[1]) - unclear
+    # What both clocks of L1 do at once is open, and each description chooses for itself.
+    assert sorted(differ) == sorted(name for name in demo().cells if name.startswith("srl_")
+                                    and not name.startswith("srl_edge"))  # fmt: skip
+    assert all(models.cells[name].scan == demo().cells[name].scan for name in differ)
+    assert all(name.startswith(("two_clock", "srl_edge")) or "bank" in name for name in unclear)

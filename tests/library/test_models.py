@@ -31,6 +31,12 @@ primitive p_latch (output reg q, input d, input g);
     ?0:?:-; 01:?:0; 11:?:1;
   endtable
 endprimitive
+primitive p_edges (q, d, g, power); output q; reg q; input d, g, power;
+  table
+    * 0 1 : ? : -; ? (?0) 1 : ? : -; (?0) 1 1 : ? : 0; (?1) 1 1 : ? : 1;
+    0 (01) 1 : ? : 0; 1 (01) 1 : ? : 1; 0 1 (?1) : ? : 0; 1 1 (?1) : ? : 1;
+  endtable
+endprimitive
 primitive p_odd (q, c); output q; reg q; input c;
   table r : 0 : 1; r : 1 : 0; f : 0 : 1; f : 1 : 0; endtable
 endprimitive
@@ -141,6 +147,7 @@ LATCHES = [
     ("p_latch (Q, D, G);", "D", "G", None),
     ("wire g; and (g, G, R); p_latch u (Q, D, g);", "D", "G R", None),
     ("always @* case (G) 1: Q = D; endcase", "D", "G", None),
+    ("supply1 p; p_edges (Q, D, G, p);", "D", "G", None),
 ]
 
 
@@ -268,14 +275,14 @@ def test_wrapped_modules_are_no_cells() -> None:
         ("assign Y = A; assign Y = A;", "`Y` has two drivers"),
         ("assign Y = A + A;", "it uses `Plus`"),
         ("p_odd u (Y, A);", "primitive `p_odd` is neither gate, latch nor flip-flop"),
-        ("reg Y; always @(posedge A or B) Y = B;", "the reader of models stops in line 22"),
+        ("reg Y; always @(posedge A or B) Y = B;", "the reader of models stops in line 28"),
         (
             "reg Y; always @(posedge A or posedge B) if (A) Y <= ~Y; else Y <= 0;",
             "takes data at the edge of a set or reset",
         ),
         ("reg Y; always @(posedge A or posedge B) Y <= 1;", "cannot be told from"),
         ("reg Y; always @* Y = ~Y;", "neither latch nor gate"),
-        ("assign Y = ;", "the reader of models stops in line 22"),
+        ("assign Y = ;", "the reader of models stops in line 28"),
         ("nmos (Y, A, B);", "`nmos` is not among the models"),
         ("wire [1:0] v; assign v[0] = A; assign Y = v[0];", "part of a vector"),
     ],
