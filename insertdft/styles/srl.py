@@ -11,13 +11,22 @@ force the pair and close the opposite side of every port, so that they win over 
 """
 
 from collections.abc import Collection, Mapping
-from dataclasses import dataclass, replace
+from dataclasses import dataclass
 from enum import Enum
 from typing import Final
 
-from insertdft.library import Gate, find_gates, find_inverters
 from insertdft.library.cell import Library
-from insertdft.netlist.names import to_verilog as name_to_verilog
+from insertdft.styles.gates import (
+    ComposedModule,
+    GateBuilder,
+    ModulePart,
+    free_name,
+    gate_builder,
+    renamed,
+    to_verilog,
+)
+
+__all__ = ["ComposedModule", "Kind", "ModulePart", "Shape", "compose", "renamed", "to_verilog"]
 
 
 class Kind(Enum):
@@ -51,44 +60,6 @@ class Shape:
     inverse_output: bool = False
 
 
-@dataclass(frozen=True, slots=True)
-class ModulePart:
-    """One cell of a composed module; nets are ports or inner wires by name."""
-
-    cell: str
-    instance: str
-    pins: Mapping[str, str]
-
-
-@dataclass(frozen=True, slots=True)
-class ComposedModule:
-    """A module made of library cells, written once and instanced many times.
-
-    Attributes:
-        name: Module name.
-        ports: (name, direction), inputs first.
-        parts: Its cells.
-        area: Sum of their areas, None if one states none.
-        purpose: What it is, for the comment in front.
-    """
-
-    name: str
-    ports: tuple[tuple[str, str], ...]
-    parts: tuple[ModulePart, ...]
-    area: float | None
-    purpose: str
-
-    def wires(self) -> tuple[str, ...]:
-        """Return the nets that are no ports, in order of first use."""
-        ports = {name for name, _ in self.ports}
-        nets = dict.fromkeys(net for part in self.parts for net in part.pins.values())
-        return tuple(net for net in nets if net not in ports)
-
-
-#: Widest NAND gate that is looked for; wider ones are made of narrower.
-_WIDEST: Final = 4
-
-
 def compose(
     library: Library, shape: Shape, taken: Collection[str] = frozenset()
 ) -> ComposedModule | None:
@@ -104,25 +75,12 @@ def compose(
     """
     if not (shape.true_output or shape.inverse_output):
         raise ValueError("a shift-register latch needs Q or QN")
-    inverter = next(iter(find_inverters(library)), None)
-    nands = {
-        width: gates[0]
-        for width in range(2, _WIDEST + 1)
-        if (gates := find_gates(library, "nand", width))
-    }
-    if inverter is None or 2 not in nands:
+    builder = gate_builder(library)
+    if builder is None:
         return None
-    builder = _Builder(inverter, nands)
     _build(builder, shape)
-    areas = [library.cells[part.cell].area for part in builder.parts]
-    area = None if None in areas else sum(area for area in areas if area is not None)
-    return ComposedModule(
-        name=free_name(_base_name(shape), taken),
-        ports=_ports(shape),
-        parts=tuple(builder.parts),
-        area=area,
-        purpose=_PURPOSE[shape.kind],
-    )
+    name = free_name(_base_name(shape), taken)
+    return builder.module(name, _ports(shape), _PURPOSE[shape.kind])
 
 
 _PURPOSE: Final[Mapping[Kind, str]] = {
@@ -130,35 +88,6 @@ _PURPOSE: Final[Mapping[Kind, str]] = {
     Kind.DOUBLE: "shift-register latch: L1 takes D under C or I under A, L2 takes L1 under B",
     Kind.SINGLE: "shift-register latch with system output L1; L2 takes L1 under B for shifting",
 }
-
-
-def free_name(base: str, taken: Collection[str]) -> str:
-    """Return ``base``, or ``base`` with the first number that makes it a name not taken."""
-    name, number = base, 1
-    while name in taken:
-        number += 1
-        name = f"{base}_{number}"
-    return name
-
-
-def renamed(module: ComposedModule, taken: Collection[str]) -> ComposedModule:
-    """Return the module under a name that is not taken."""
-    return replace(module, name=free_name(module.name, taken))
-
-
-def to_verilog(module: ComposedModule) -> str:
-    """Return the text of the module, to be written once into the netlist."""
-    names = ", ".join(name for name, _ in module.ports)
-    lines = [
-        f"// Composed from library gates: {module.purpose}.",
-        f"module {name_to_verilog(module.name)} ({names});",
-    ]
-    lines += [f"  {direction} {name};" for name, direction in module.ports]
-    lines += [f"  wire {name};" for name in module.wires()]
-    for part in module.parts:
-        pins = ", ".join(f".{name_to_verilog(pin)}({net})" for pin, net in part.pins.items())
-        lines.append(f"  {name_to_verilog(part.cell)} {part.instance} ({pins});")
-    return "\n".join([*lines, "endmodule", ""])
 
 
 def _base_name(shape: Shape) -> str:
@@ -183,40 +112,6 @@ def _ports(shape: Shape) -> tuple[tuple[str, str], ...]:
     return (*((name, "input") for name in inputs), *((name, "output") for name in outputs))
 
 
-class _Builder:
-    """Cells so far, and the gates to take."""
-
-    def __init__(self, inverter: Gate, nands: Mapping[int, Gate]) -> None:
-        self.parts: list[ModulePart] = []
-        self._inverter = inverter
-        self._nands = nands
-
-    def invert(self, net: str, output: str) -> str:
-        gate = self._inverter
-        self._add(gate, f"inv_{output}", {gate.inputs[0]: net}, output)
-        return output
-
-    def nand(self, nets: list[str], output: str) -> str:
-        """Add a NAND over all ``nets``; what no gate is wide enough for is ANDed first."""
-        inputs = list(nets)
-        step = 0
-        while len(inputs) not in self._nands:
-            widest = max(width for width in self._nands if width < len(inputs))
-            most = min(widest, len(inputs) - 1)
-            step += 1
-            part = self._narrow(inputs[:most], f"{output}_{step}")
-            inputs = [part, *inputs[most:]]
-        gate = self._nands[len(inputs)]
-        self._add(gate, f"nand_{output}", dict(zip(gate.inputs, inputs, strict=True)), output)
-        return output
-
-    def _narrow(self, nets: list[str], output: str) -> str:
-        return self.invert(self.nand(nets, f"{output}n"), output)
-
-    def _add(self, gate: Gate, instance: str, inputs: Mapping[str, str], output: str) -> None:
-        self.parts.append(ModulePart(gate.cell, instance, {**inputs, gate.output: output}))
-
-
 @dataclass(frozen=True, slots=True)
 class _Force:
     """Nets that are 0 while the state is forced to 0, and while it is forced to 1."""
@@ -225,7 +120,7 @@ class _Force:
     preset_n: list[str]
 
 
-def _build(builder: _Builder, shape: Shape) -> None:
+def _build(builder: GateBuilder, shape: Shape) -> None:
     clock = builder.invert("C", "c_on") if shape.clock_low else "C"
     force = _force(builder, shape)
     system = (clock, "D", builder.invert("D", "d_n"))
@@ -248,7 +143,7 @@ def _out(shape: Shape) -> tuple[str, str]:
     return ("Q" if shape.true_output else "q", "QN" if shape.inverse_output else "q_n")
 
 
-def _force(builder: _Builder, shape: Shape) -> _Force:
+def _force(builder: GateBuilder, shape: Shape) -> _Force:
     """Bring set and reset to nets that are 0 while they act; where both do, one wins."""
     clear_n, preset_n = "R", "S"
     if shape.clear == 1:
@@ -269,7 +164,7 @@ def _force(builder: _Builder, shape: Shape) -> _Force:
 
 
 def _latch(
-    builder: _Builder,
+    builder: GateBuilder,
     outputs: tuple[str, str],
     ports: list[tuple[str, str, str]],
     force: _Force,

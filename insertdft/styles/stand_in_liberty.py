@@ -7,7 +7,7 @@ from typing import Final
 from insertdft.library.cell import StorageKind
 from insertdft.library.expression import Const, Expression, evaluate
 from insertdft.library.functions import literal, support
-from insertdft.styles.srl import free_name
+from insertdft.styles.gates import free_name
 from insertdft.styles.stand_in_parts import MARK, Parts, StandInKind, to_text
 
 

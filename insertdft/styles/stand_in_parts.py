@@ -8,7 +8,7 @@ from typing import Final
 from insertdft.library.cell import Cell, Storage, StorageKind
 from insertdft.library.expression import And, Const, Expression, Not, Or, Var, Xor
 from insertdft.library.functions import literal, support
-from insertdft.styles.srl import free_name
+from insertdft.styles.gates import free_name
 
 MARK: Final = "STAND-IN written by insertdft: function only, no layout, no area, no timing"
 

@@ -10,7 +10,7 @@ from dataclasses import dataclass, replace
 
 from insertdft.library import read_library
 from insertdft.library.cell import Cell, Library
-from insertdft.styles.srl import free_name
+from insertdft.styles.gates import free_name
 from insertdft.styles.stand_in_liberty import liberty
 from insertdft.styles.stand_in_parts import StandInKind, read_parts
 from insertdft.styles.stand_in_verilog import verilog
