@@ -76,8 +76,8 @@ def _report_troubles(columns: LatchColumns, irregular: Irregular, verdict: Verdi
             "clock-not-controllable",
             latches,
             f"latch enable net `{verdict.design.net_name(net)}` {why}",
-            "name the clock port with --clock, hold the ports that open its path with"
-            " --hold PORT=VALUE, or clock it from a port in test",
+            "hold the ports that open its path with --hold PORT=VALUE, or clock it from a port"
+            " in test",
         )
 
 

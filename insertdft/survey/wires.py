@@ -195,9 +195,10 @@ def _to_the_end(root: Ids, turned: Flags) -> tuple[Ids, Flags]:
     for _ in range(_MOST_DOUBLINGS):
         further = root[root]
         if np.array_equal(further, root):
-            return root, turned
+            break
         turned = turned ^ turned[root]
         root = further
+    # A ring whose length is a power of two comes to rest as well, at nets that still have wires.
     endless = first[root] != root
     own = np.arange(len(root), dtype=np.int32)
     return np.where(endless, own, root).astype(np.int32), turned & ~endless
