@@ -88,6 +88,10 @@ SLUGS: Final[dict[str, str]] = {
     "port-taken": "A name for a new port is already taken",
     "plan-unreadable": "A plan file is not valid",
     "plan-mismatch": "A plan does not belong to this netlist or library",
+    "latch-pair-apart": "A master latch and its slave stand in different modules",
+    "shift-clock-gated": "Logic can keep a shift clock from a latch",
+    "negative-edge-in-lssd": "A falling-edge flip-flop has no two-phase form",
+    "latch-copy": "A latch copies the state of a position and needs no scan of its own",
     # trace
     "chain-broken": "A scan chain cannot be walked from its scan-out to its scan-in",
     "chain-differs": "A scan chain is not what the chain description says",

@@ -75,7 +75,7 @@ def assemble(
         chains=chains,
         port_names=port_names,
         connector=connector,
-        ports=_ports(survey, chosen, modules[design.netlist.top], port_names),
+        ports=_ports(survey, wishes, chosen, modules[design.netlist.top], port_names),
         sequences=make_sequences(_clocking(survey, chosen, shifts, port_names)),
         left_alone=_left_alone(survey, chosen),
         lower_bound=arrangement.lower_bound,
@@ -105,13 +105,15 @@ def _shift_clocks(chosen: Chosen, group: int, port_names: Mapping[str, str]) -> 
     style, domain = chosen.groups[group]
     if style == "mux-d" and domain is not None:
         return (domain.port,)
-    leaves = chosen.cells.leaves[chosen.cells.group[chosen.cells.leaves] == group]
+    heads = chosen.cells.leaves[chosen.cells.group[chosen.cells.leaves] == group].tolist()
+    behind = [leaf for head in heads for leaf in chosen.cells.followers.get(head, ())]
     used = {
         net
-        for number in set(chosen.conversion[leaves].tolist())
+        for number in set(chosen.conversion[[*heads, *behind]].tolist())
         for net in chosen.conversions[number].test_nets()
     }
-    return tuple(port_names[net] for net in in_port_order(used))
+    ports = tuple(port_names[net] for net in in_port_order(used))
+    return (*ports, *chosen.lssd.shift_b) if style == "lssd" else ports
 
 
 def _chain(name: str, group: Group, clocks: tuple[str, ...]) -> ChainPlan:
@@ -131,16 +133,36 @@ def _clocking(
         for place in range(max(map(len, shifts)))
     ]
     enable = port_names.get(TestNet.SCAN_ENABLE)
+    opens_l2 = _opens_l2(chosen, port_names)
+    phases = [tuple(dict.fromkeys(ports)) for ports in by_phase[: 1 if opens_l2 else None]]
+    settle = (opens_l2,) if opens_l2 else ()
     return Clocking(
         held={item.port: item.value for item in (*survey.held, *survey.set_resets)},
         enable=() if enable is None else (enable,),
-        shift=tuple(tuple(dict.fromkeys(ports)) for ports in by_phase),
-        capture=tuple((clock,) for clock in _system_clocks(chosen)),
+        shift=(*phases, *settle),
+        capture=tuple((clock,) for clock in _system_clocks(survey, chosen)),
+        settle=settle,
     )
 
 
-def _system_clocks(chosen: Chosen) -> list[str]:
-    return list(dict.fromkeys(at.domain.port for at in chosen.groups if at.domain is not None))
+def _opens_l2(chosen: Chosen, port_names: Mapping[str, str]) -> tuple[str, ...]:
+    """Return the ports that open the second latches of LSSD positions, if there are any."""
+    new = port_names.get(TestNet.CLOCK_B)
+    return (*(() if new is None else (new,)), *chosen.lssd.shift_b)
+
+
+def _system_clocks(survey: Survey, chosen: Chosen) -> dict[str, int]:
+    """Return the clock ports that capture with their values at rest, in the order they pulse."""
+    ports = {at.domain.port: 0 for at in chosen.groups if at.domain is not None}
+    ports |= chosen.lssd.capture
+    domain = dict(zip(survey.storage.tolist(), survey.domain.tolist(), strict=True))
+    for leaf in chosen.lssd.conversion:
+        at = domain[leaf]
+        if chosen.conversion[leaf] >= 0 and at >= 0:
+            edge = survey.domains[at].edge
+            if edge in ("rise", "fall"):
+                ports.setdefault(survey.domains[at].port, 0)
+    return ports
 
 
 def _test_nets(
@@ -205,7 +227,9 @@ def _added_area(
     """Return area added over all places of the design, and cells added that state none."""
     design = survey.design
     added, without = 0.0, []
-    counts = np.bincount(chosen.conversion[chosen.cells.leaves], minlength=len(chosen.conversions))
+    counts = np.bincount(
+        chosen.conversion[chosen.conversion >= 0], minlength=len(chosen.conversions)
+    )
     for conversion, count in zip(chosen.conversions, counts.tolist(), strict=True):
         if conversion.area is None:
             without += [conversion.after, *(part.cell for part in conversion.parts)]
@@ -238,24 +262,32 @@ _CLOCKS: Final = {
 
 
 def _ports(
-    survey: Survey, chosen: Chosen, top: ModulePlan, port_names: Mapping[str, str]
+    survey: Survey,
+    wishes: Wishes,
+    chosen: Chosen,
+    top: ModulePlan,
+    port_names: Mapping[str, str],
 ) -> tuple[TestPort, ...]:
     resets = {item.port: item.value for item in survey.set_resets}
     modes = {item.port: item.value for item in survey.held}
+    clocks = _system_clocks(survey, chosen) | chosen.lssd.shift_b
+    two_phase = wishes.flip_flops == "two-phase"
     return (
-        *(TestPort(clock, "clock", off=0) for clock in _system_clocks(chosen)),
+        *(TestPort(clock, "clock", off=off) for clock, off in clocks.items()),
         *(TestPort(at, "set_reset", shift=on, capture=on) for at, on in resets.items()),
         *(TestPort(at, "test_mode", shift=on, capture=on) for at, on in modes.items()),
-        *(_test_net_port(net, port) for net, port in port_names.items()),
+        *(_test_net_port(net, port, two_phase) for net, port in port_names.items()),
         *(TestPort(segment.scan_in, "scan_in", added=True, mission=0) for segment in top.segments),
         *(TestPort(segment.scan_out, "scan_out", added=True) for segment in top.segments),
     )
 
 
-def _test_net_port(net: str, port: str) -> TestPort:
+def _test_net_port(net: str, port: str, two_phase: bool) -> TestPort:
     kind = kind_of(net)
     if kind in _CLOCKS:
-        return TestPort(port, _CLOCKS[kind], added=True, mission=0, off=0)
+        # In the two-phase form the user's own clocking drives B in mission mode.
+        mission = None if two_phase and kind == TestNet.CLOCK_B else 0
+        return TestPort(port, _CLOCKS[kind], added=True, mission=mission, off=0)
     role, mission, shift, capture = _LEVELS[kind]
     return TestPort(port, role, added=True, mission=mission, shift=shift, capture=capture)
 

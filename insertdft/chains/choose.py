@@ -8,6 +8,7 @@ from typing import NamedTuple
 import numpy as np
 
 from insertdft.chains.arrange import Cells
+from insertdft.chains.choose_lssd import LssdChoice, choose_lssd
 from insertdft.chains.regions import Hierarchy, copies
 from insertdft.chains.wishes import Wishes
 from insertdft.design.flat import Design
@@ -16,6 +17,7 @@ from insertdft.netlist import Ids
 from insertdft.styles import Chooser, Conversion, Refusal
 from insertdft.survey import LEFT_ALONE, Domain, Survey
 from insertdft.survey.kept import matches, unmatched
+from insertdft.survey.look import is_latch
 
 
 class Group(NamedTuple):
@@ -45,6 +47,7 @@ class Chosen:
         conversion: Shape (leaves,), index of the conversion of each leaf, -1 for none.
         conversions: What the indices mean.
         reasons: Leaf -> slug of what keeps it out.
+        lssd: Positions of LSSD chains; empty if there are none.
         findings: One a cause, beyond the survey's.
     """
 
@@ -53,6 +56,7 @@ class Chosen:
     conversion: Ids
     conversions: list[Conversion]
     reasons: dict[int, str]
+    lssd: LssdChoice
     findings: list[Diagnostic] = field(default_factory=list)
 
 
@@ -63,27 +67,121 @@ def choose_cells(survey: Survey, wishes: Wishes, layout: Hierarchy) -> Chosen:
         DesignError: A pattern matches nothing.
     """
     design = survey.design
-    chooser = Chooser(design, wishes.style)
-    conversion = np.full(len(design.cell), -1, np.int32)
     refused: defaultdict[Refusal, list[int]] = defaultdict(list)
-    wanted = survey.storage[survey.domain != LEFT_ALONE]
-    for leaf in _included(design, wanted, wishes.include, refused):
+    chosen = _Conversions(np.full(len(design.cell), -1, np.int32))
+    candidates = _candidates(survey, wishes)
+    leaves = _included(design, candidates, wishes.include, refused)
+    by_style = _styles(design, leaves, wishes)
+    lssd = _choose_lssd(survey, by_style.pop("lssd", []), wishes, chosen, refused)
+    for style, those in by_style.items():
+        _choose_flip_flops(design, style, those, chosen, refused)
+    conversion = chosen.of
+    _agree(layout, conversion, refused)
+    followers = {
+        head: behind
+        for head, behind in lssd.followers.items()
+        if conversion[head] >= 0 and conversion[list(behind)].min() >= 0
+    }
+    heads = conversion >= 0
+    heads[[leaf for behind in followers.values() for leaf in behind]] = False
+    leaves_of_chains = np.flatnonzero(heads).astype(np.int32)
+    groups, group = _group(survey, chosen.table, conversion, leaves_of_chains)
+    conversions = _give_scan_clocks(layout, chosen.table, conversion, group, groups)
+    bits = np.zeros(len(design.cell), np.int32)
+    bits[leaves_of_chains] = [conversions[at].bits for at in conversion[leaves_of_chains].tolist()]
+    reasons = {leaf: at for leaf, at in survey.reasons.items() if conversion[leaf] < 0}
+    reasons |= {leaf: refusal.slug for refusal, those in refused.items() for leaf in those}
+    findings = [_refusal(design, refusal, those) for refusal, those in refused.items()]
+    cells = Cells(leaves_of_chains, group, bits, followers)
+    findings += lssd.findings
+    return Chosen(cells, groups, conversion, conversions, reasons, lssd, findings)
+
+
+@dataclass(slots=True)
+class _Conversions:
+    """Conversions so far.
+
+    Attributes:
+        of: Shape (leaves,), index of the conversion of each leaf, -1 for none.
+        table: What the indices mean.
+    """
+
+    of: Ids
+    table: list[Conversion] = field(default_factory=list)
+
+
+def _candidates(survey: Survey, wishes: Wishes) -> Ids:
+    """Return the storage cells that nothing keeps out.
+
+    A latch of an LSSD chain may have a clock that logic gates: only its shift clocks need not be.
+    """
+    free = survey.domain != LEFT_ALONE
+    if wishes.style == "lssd" or wishes.latches == "lssd" or wishes.styles:
+        gated = {at for at, slug in survey.reasons.items() if slug in _GATED_CLOCKS}
+        latches = [at in gated and is_latch(survey.design, at) for at in survey.storage.tolist()]
+        free = free | np.array(latches, bool)
+    found: Ids = survey.storage[free]
+    return found
+
+
+_GATED_CLOCKS = frozenset({"clock-not-controllable"})
+
+
+def _styles(design: Design, leaves: Iterable[int], wishes: Wishes) -> dict[str, list[int]]:
+    """Return the cells of each style, in source order."""
+    found: defaultdict[str, list[int]] = defaultdict(list)
+    if not wishes.styles and wishes.latches == "as-style":
+        return {wishes.style: list(leaves)}
+    for leaf in leaves:
+        style = wishes.style
+        if wishes.latches == "lssd" and is_latch(design, leaf):
+            style = "lssd"
+        name = design.name(leaf) if wishes.styles else ""
+        for pattern, other in wishes.styles:
+            if matches(name, pattern):
+                style = other
+        found[style].append(leaf)
+    return dict(found)
+
+
+def _choose_lssd(
+    survey: Survey,
+    leaves: list[int],
+    wishes: Wishes,
+    chosen: _Conversions,
+    refused: defaultdict[Refusal, list[int]],
+) -> LssdChoice:
+    if not leaves:
+        return LssdChoice()
+    held = {item.port: item.value for item in (*survey.held, *survey.set_resets)}
+    choice = choose_lssd(survey.design, leaves, held, wishes)
+    numbers: dict[int, int] = {}
+    for leaf, conversion in choice.conversion.items():
+        if id(conversion) not in numbers:
+            numbers[id(conversion)] = len(chosen.table)
+            chosen.table.append(conversion)
+        chosen.of[leaf] = numbers[id(conversion)]
+    for refusal, those in choice.refused.items():
+        refused[refusal] += those
+    return choice
+
+
+def _choose_flip_flops(
+    design: Design,
+    style: str,
+    leaves: list[int],
+    chosen: _Conversions,
+    refused: defaultdict[Refusal, list[int]],
+) -> None:
+    chooser = Chooser(design, style)
+    base = len(chosen.table)
+    for leaf in leaves:
         found = chooser.choose(leaf)
         if isinstance(found, Refusal):
             refused[found].append(leaf)
         else:
-            conversion[leaf] = found
-    _agree(layout, conversion, refused)
-    leaves = np.flatnonzero(conversion >= 0).astype(np.int32)
-    groups, group = _group(survey, chooser.conversions, conversion, leaves)
-    conversions = _give_scan_clocks(layout, chooser.conversions, conversion, group, groups)
-    bits = np.zeros(len(design.cell), np.int32)
-    bits[leaves] = [conversions[at].bits for at in conversion[leaves].tolist()]
-    reasons = dict(survey.reasons)
-    reasons |= {leaf: refusal.slug for refusal, those in refused.items() for leaf in those}
-    findings = [_refusal(design, refusal, those) for refusal, those in refused.items()]
-    cells = Cells(leaves, group, bits)
-    return Chosen(cells, groups, conversion, conversions, reasons, findings)
+            chosen.of[leaf] = base + found
+    chosen.table += chooser.conversions
 
 
 def _group(
@@ -178,7 +276,7 @@ def _agree(layout: Hierarchy, conversion: Ids, refused: dict[Refusal, list[int]]
 
 
 def _refusal(design: Design, refusal: Refusal, leaves: Sequence[int]) -> Diagnostic:
-    quiet = refusal.slug in ("latch-not-scanned", "cell-kept")
+    quiet = refusal.slug in ("latch-not-scanned", "cell-kept", "latch-copy")
     return Diagnostic(
         refusal.slug,
         Severity.NOTE if quiet else Severity.WARNING,

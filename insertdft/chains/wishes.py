@@ -28,6 +28,12 @@ class Wishes:
         exclude: Patterns of hierarchical names that are left alone.
         ports: Names for new ports by what they carry; see ``DEFAULT_PORTS``.
         connect: ``buffer`` or ``assign``: what drives a scan-out port.
+        styles: (pattern, style) pairs for cells that get another style; the last match holds.
+        latches: ``lssd`` to give latches LSSD whatever the style of the flip-flops, else
+            ``as-style``.
+        star: Whether two system latches of different phases may share one position (L1/L2*).
+        flip_flops: What a flip-flop becomes in LSSD: ``edge``, a cell that keeps its clock edge,
+            or ``two-phase``, a double latch whose C is the old clock and whose B is a new port.
     """
 
     style: str = "mux-d"
@@ -37,3 +43,7 @@ class Wishes:
     exclude: tuple[str, ...] = ()
     ports: Mapping[str, str] = field(default_factory=dict)
     connect: str = "buffer"
+    styles: tuple[tuple[str, str], ...] = ()
+    latches: str = "as-style"
+    star: bool = False
+    flip_flops: str = "edge"

@@ -19,7 +19,7 @@ from insertdft.text import apply_splices
 @design_options
 @click.option(
     "--style",
-    type=click.Choice(["mux-d", "clocked-scan"]),
+    type=click.Choice(["mux-d", "clocked-scan", "lssd"]),
     default="mux-d",
     show_default=True,
     help="Scan style.",
@@ -44,6 +44,26 @@ from insertdft.text import apply_splices
     default="buffer",
     show_default=True,
     help="What leads from a cell to a scan-out port.",
+)
+@click.option(
+    "--latches",
+    type=click.Choice(["as-style", "lssd"]),
+    default="as-style",
+    show_default=True,
+    help="Give latches LSSD whatever the style of the flip-flops.",
+)
+@click.option(
+    "--share-l2",
+    "star",
+    is_flag=True,
+    help="LSSD: two system latches of different phases may share one position (L1/L2*).",
+)
+@click.option(
+    "--flip-flops",
+    type=click.Choice(["edge", "two-phase"]),
+    default="edge",
+    show_default=True,
+    help="LSSD: keep a flip-flop's clock edge, or make it a double latch under C and B.",
 )
 @click.option(
     "--plan",
@@ -76,6 +96,9 @@ def command(
     hold: dict[str, int],
     port_names: tuple[str, ...],
     connect: str,
+    latches: str,
+    star: bool,
+    flip_flops: str,
     plan_file: Path | None,
     out: Path,
     as_json: bool,
@@ -92,7 +115,19 @@ def command(
     """
     tables = tables or {}
     ports = dict(tables.get("ports", {})) | _pairs(port_names)
-    wishes = api.Wishes(style, chains, max_length, include, exclude, ports, connect)
+    wishes = api.Wishes(
+        style=style,
+        chains=chains,
+        max_length=max_length,
+        include=include,
+        exclude=exclude,
+        ports=ports,
+        connect=connect,
+        styles=tuple(tables.get("styles", {}).items()),
+        latches=latches,
+        star=star,
+        flip_flops=flip_flops,
+    )
     progress = Progress(quiet=as_json)
     progress("reading")
     design, warnings = api.read_design(

@@ -13,7 +13,7 @@ F = TypeVar("F", bound=Callable[..., Any])
 
 OPTIONS_FILE: Final = "insertdft.toml"
 #: Tables of the options file that are no command.
-TABLES: Final = ("twins", "ports")
+TABLES: Final = ("twins", "ports", "styles")
 
 
 def design_options(function: F) -> F:
@@ -107,11 +107,11 @@ def _defaults(
 
 
 #: Options whose parameter has another name.
-_NAMES: Final = {"json": "as_json"}
+_NAMES: Final = {"json": "as_json", "share-l2": "star"}
 #: Every option of any command: a file may hold options of several.
 _EVERY: Final = (
     "netlist lib top define hold style chains max_length include exclude connect out plan "
-    "as_json scan_chains"
+    "as_json scan_chains latches star flip_flops"
 ).split()
 
 

@@ -19,6 +19,7 @@ class Step(NamedTuple):
         net: Net at that pin.
         is_latch: Whether it is a single latch, as a lock-up is.
         bits: Shift cycles through it.
+        scan_clock: Net that clocks the scan port of a two-port latch, -1 for other cells.
     """
 
     instance: int
@@ -29,6 +30,7 @@ class Step(NamedTuple):
     net: int
     is_latch: bool
     bits: int
+    scan_clock: int = -1
 
 
 def step_into(walker: Walker, source: Source) -> Step | None:
@@ -41,7 +43,9 @@ def step_into(walker: Walker, source: Source) -> Step | None:
     if cell is None:
         return None
     if len(cell.storage) == 1 and cell.storage[0].bits == 1:
-        return _by_function(walker, source, cell, cell.storage[0])
+        found = _by_function(walker, source, cell, cell.storage[0])
+        if found is not None:
+            return found
     return _by_role(walker, source, cell)
 
 
@@ -76,6 +80,8 @@ def _by_role(walker: Walker, source: Source, cell: Cell) -> Step | None:
     net = walker.design.pins(source.instance).get(role.scan_in, -1)
     if output is None or net < 0:
         return None
+    is_first = role.clock_a is not None and role.clock_b is None
+    clock = walker.design.net_at(source.instance, role.clock_a or "") if is_first else -1
     return Step(
         source.instance,
         source.pin,
@@ -85,6 +91,7 @@ def _by_role(walker: Walker, source: Source, cell: Cell) -> Step | None:
         net,
         False,
         role.bits,
+        clock,
     )
 
 

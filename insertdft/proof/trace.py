@@ -5,7 +5,7 @@ through whatever passes the data on in shift mode: buffers, inverters, composed 
 """
 
 from collections.abc import Sequence
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from itertools import zip_longest
 
 from insertdft.description import Chain, ChainCell, Description, LockUp
@@ -98,7 +98,10 @@ def as_chain(walker: Walker, described: Chain, walk: Walk) -> Chain:
     forward = list(zip(reversed(walk.steps), list(reversed(walk.inversions))[:-1], strict=True))
     for step, wire in forward:
         turned ^= wire ^ step.entry_inverted
-        if step.is_latch:
+        if cells and _is_second_latch(walker, described, step):
+            name = design.name(step.instance)
+            cells[-1] = replace(cells[-1], slave=name, scan_out=step.output)
+        elif step.is_latch:
             name, cell = design.name(step.instance), design.cell_name(step.instance)
             lock_ups.append(LockUp(len(cells) - 1, name, cell, _clock_port(walker, step)))
         else:
@@ -118,6 +121,18 @@ def as_chain(walker: Walker, described: Chain, walk: Walk) -> Chain:
         inverted_out=turned ^ walk.inversions[0],
         lock_ups=tuple(lock_ups),
     )
+
+
+def _is_second_latch(walker: Walker, described: Chain, step: Step) -> bool:
+    """Return whether a step of an LSSD chain is the L2 of the position before it."""
+    if described.style != "lssd":
+        return False
+    if step.is_latch:
+        return True
+    source = walker.source(step.scan_clock) if step.scan_clock >= 0 else None
+    if source is None or source.end is not End.PORT:
+        return False
+    return walker.design.input_ports[source.net] in described.clocks[1:]
 
 
 def _position(design: Design, step: Step, inverted: bool) -> ChainCell:
@@ -162,6 +177,12 @@ def _first_difference(wanted: Chain, found: Chain) -> Diagnostic | None:
         if described.inverted != seen.inverted:
             words = "inverted" if seen.inverted else "not inverted"
             return _differs(wanted, f"is {words} before `{seen.instance}`, described the other way")
+        if described.slave != seen.slave:
+            return _differs(
+                wanted,
+                f"has {_name(seen.slave)} as L2 of `{seen.instance}`, described with"
+                f" {_name(described.slave)}",
+            )
         if (described.scan_in, described.scan_out) != (seen.scan_in, seen.scan_out):
             return _differs(
                 wanted,
@@ -175,6 +196,10 @@ def _first_difference(wanted: Chain, found: Chain) -> Diagnostic | None:
     if names[0] != names[1]:
         return _differs(wanted, f"has lock-ups {names[1]}, described with {names[0]}")
     return None
+
+
+def _name(instance: str | None) -> str:
+    return "nothing" if instance is None else f"`{instance}`"
 
 
 def _differs(chain: Chain, words: str) -> Diagnostic:
