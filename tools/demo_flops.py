@@ -1,5 +1,6 @@
 """Flip-flops of the demo library: plain, and with each of the three ways to shift."""
 
+from collections.abc import Mapping
 from dataclasses import dataclass
 from typing import Final
 
@@ -55,22 +56,24 @@ class Kind:
             words += ["clear_preset_var1 : L;", "clear_preset_var2 : H;"]
         return words
 
-    def verilog(self, edges: str, captured: str) -> str:
-        """Return a model that captures ``captured`` (an ``if`` chain may stand before it)."""
-        events, lines, wires = edges, [], []
+    def verilog(self, captured: Mapping[str, str]) -> str:
+        """Return a model that does at each event what ``captured`` says, unless set or reset."""
+        events, forced, wires = "", [], ""
         if self.reset:
             events += " or negedge RN"
-            lines.append("if (!RN) state <= 1'b0;")
+            forced.append("if (!RN) state <= 1'b0;")
         if self.preset and self.reset:
             events += " or posedge preset"
-            wires.append("  wire preset = RN & ~SN;  // so that SN acts when RN goes away first\n")
-            lines.append("if (preset) state <= 1'b1;")
+            wires = "  wire preset = RN & ~SN;  // so that SN acts when RN goes away first\n"
+            forced.append("if (preset) state <= 1'b1;")
         elif self.preset:
             events += " or negedge SN"
-            lines.append("if (!SN) state <= 1'b1;")
-        lines.append(captured)
-        body = "\n    else ".join(lines)
-        return f"  reg state;\n{''.join(wires)}  always @({events})\n    {body}\n{self.shown()}"
+            forced.append("if (!SN) state <= 1'b1;")
+        blocks = ""
+        for edge, taken in captured.items():
+            body = "\n    else ".join([*forced, taken])
+            blocks += f"  always @({edge}{events})\n    {body}\n"
+        return f"  reg state;\n{wires}{blocks}{self.shown()}"
 
     def shown(self, state: str = "state") -> str:
         """Return the assigns of the outputs."""
@@ -148,7 +151,7 @@ def plain_flop(kind: Kind, drive: int) -> Cell:
         flop_size(kind, drive),
         flop_ports(kind, (), tested=False),
         kind.group(kind.mission),
-        verilog=kind.verilog(kind.edge(), captured),
+        verilog=kind.verilog({kind.edge(): captured}),
         timing=flop_timing(kind),
     )
 
@@ -175,7 +178,7 @@ def scan_flop(kind: Kind, drive: int) -> Cell:
         flop_ports(kind, extra, tested=True),
         kind.group(f"(SE & SI) | (!SE & ({kind.mission}))"),
         kind.group(kind.mission),
-        kind.verilog(kind.edge(), captured),
+        kind.verilog({kind.edge(): captured}),
         timing=flop_timing(kind, (("SI", kind.clock, word), ("SE", kind.clock, word))),
     )
 
@@ -186,12 +189,7 @@ def two_clock_flop(kind: Kind, drive: int) -> Cell:
         Port("SI", SMALL, signal="test_scan_in"),
         Port("SCK", CLOCK, signal="test_scan_clock", attributes=("clock : true;",)),
     )
-    on = f"!{kind.clock}" if kind.falling else kind.clock
-    data = "if (E) state <= D;" if kind.enable else "state <= D;"
-    captured = (
-        f"if (SCK & {on}) state <= 1'bx;  // never both\n"
-        f"    else if (SCK) state <= SI;\n    else {data}"
-    )
+    captured = "if (E) state <= D;" if kind.enable else "state <= D;"
     timing = flop_timing(kind, (("SI", "SCK", "rising"),))
     outs = tuple(kind.outputs.split())
     return Cell(
@@ -201,7 +199,7 @@ def two_clock_flop(kind: Kind, drive: int) -> Cell:
         state_ports(flop_ports(kind, extra, tested=True), "IQ"),
         clocked_scan_table(kind.clock, kind.asynchronous, falling=kind.falling, enable=kind.enable),
         kind.group(kind.mission),
-        kind.verilog(f"{kind.edge()} or posedge SCK", captured),
+        kind.verilog({kind.edge(): captured, "posedge SCK": "state <= SI;"}),
         timing=Timing(
             (*timing.launch, ("SCK", "rising_edge", outs)),
             timing.checks,

@@ -80,14 +80,17 @@ def _free(asynchronous: Sequence[str]) -> tuple[tuple[str, str], ...]:
 def clocked_scan_table(
     clock: str, asynchronous: Sequence[str], *, falling: bool, enable: bool
 ) -> str:
-    """Return the table of a cell that takes D on its clock and SI on the rise of SCK."""
-    edge, rest = ("F", "H") if falling else ("R", "L")
+    """Return the table of a cell that takes D on its clock and SI on the rise of SCK.
+
+    Each clock works while the other stays at either level; both edges at once give an unknown.
+    """
+    edge = "F" if falling else "R"
     free = _free(asynchronous)
-    on = ((clock, edge), ("SCK", "L"), *free)
+    on = ((clock, edge), ("SCK", "~R"), *free)
     take = [Way((*on, ("E", "H")), "D"), Way((*on, ("E", "L")), None)] if enable else [Way(on, "D")]
     ways = [
         *take,
-        Way(((clock, rest), ("SCK", "R"), *free), "SI"),
+        Way(((clock, f"~{edge}"), ("SCK", "R"), *free), "SI"),
         Way(((clock, f"~{edge}"), ("SCK", "~R"), *free), None),
     ]
     inputs = ["D", *["E"] * enable, clock, "SI", "SCK", *asynchronous]

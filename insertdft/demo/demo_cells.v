@@ -619,10 +619,10 @@ module two_clock_flop_w1 (D, SI, SCK, CK, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK)
-    if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
-    else state <= D;
+  always @(posedge CK)
+    state <= D;
+  always @(posedge SCK)
+    state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -635,10 +635,10 @@ module two_clock_flop_w2 (D, SI, SCK, CK, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK)
-    if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
-    else state <= D;
+  always @(posedge CK)
+    state <= D;
+  always @(posedge SCK)
+    state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -652,11 +652,12 @@ module two_clock_flop_r_w1 (D, SI, SCK, CK, RN, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK or negedge RN)
+  always @(posedge CK or negedge RN)
     if (!RN) state <= 1'b0;
-    else if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
     else state <= D;
+  always @(posedge SCK or negedge RN)
+    if (!RN) state <= 1'b0;
+    else state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -670,11 +671,12 @@ module two_clock_flop_r_w2 (D, SI, SCK, CK, RN, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK or negedge RN)
+  always @(posedge CK or negedge RN)
     if (!RN) state <= 1'b0;
-    else if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
     else state <= D;
+  always @(posedge SCK or negedge RN)
+    if (!RN) state <= 1'b0;
+    else state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -688,11 +690,12 @@ module two_clock_flop_s_w1 (D, SI, SCK, CK, SN, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK or negedge SN)
+  always @(posedge CK or negedge SN)
     if (!SN) state <= 1'b1;
-    else if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
     else state <= D;
+  always @(posedge SCK or negedge SN)
+    if (!SN) state <= 1'b1;
+    else state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -708,12 +711,14 @@ module two_clock_flop_rs_w1 (D, SI, SCK, CK, RN, SN, Q, QN);
   output QN;
   reg state;
   wire preset = RN & ~SN;  // so that SN acts when RN goes away first
-  always @(posedge CK or posedge SCK or negedge RN or posedge preset)
+  always @(posedge CK or negedge RN or posedge preset)
     if (!RN) state <= 1'b0;
     else if (preset) state <= 1'b1;
-    else if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
     else state <= D;
+  always @(posedge SCK or negedge RN or posedge preset)
+    if (!RN) state <= 1'b0;
+    else if (preset) state <= 1'b1;
+    else state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -726,10 +731,10 @@ module two_clock_flop_n_w1 (D, SI, SCK, CKN, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(negedge CKN or posedge SCK)
-    if (SCK & !CKN) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
-    else state <= D;
+  always @(negedge CKN)
+    state <= D;
+  always @(posedge SCK)
+    state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -743,11 +748,12 @@ module two_clock_flop_nr_w1 (D, SI, SCK, CKN, RN, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(negedge CKN or posedge SCK or negedge RN)
+  always @(negedge CKN or negedge RN)
     if (!RN) state <= 1'b0;
-    else if (SCK & !CKN) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
     else state <= D;
+  always @(posedge SCK or negedge RN)
+    if (!RN) state <= 1'b0;
+    else state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -761,10 +767,10 @@ module two_clock_flop_e_w1 (D, E, SI, SCK, CK, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK)
-    if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
-    else if (E) state <= D;
+  always @(posedge CK)
+    if (E) state <= D;
+  always @(posedge SCK)
+    state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -779,11 +785,12 @@ module two_clock_flop_er_w1 (D, E, SI, SCK, CK, RN, Q, QN);
   output Q;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK or negedge RN)
+  always @(posedge CK or negedge RN)
     if (!RN) state <= 1'b0;
-    else if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
     else if (E) state <= D;
+  always @(posedge SCK or negedge RN)
+    if (!RN) state <= 1'b0;
+    else state <= SI;
   assign `TIDE_DELAY Q = state;
   assign `TIDE_DELAY QN = ~state;
 endmodule
@@ -795,10 +802,10 @@ module two_clock_flop_inverse_w1 (D, SI, SCK, CK, QN);
   input CK;
   output QN;
   reg state;
-  always @(posedge CK or posedge SCK)
-    if (SCK & CK) state <= 1'bx;  // never both
-    else if (SCK) state <= SI;
-    else state <= D;
+  always @(posedge CK)
+    state <= D;
+  always @(posedge SCK)
+    state <= SI;
   assign `TIDE_DELAY QN = ~state;
 endmodule
 
