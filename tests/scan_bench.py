@@ -103,7 +103,8 @@ class _Run:
         ]
         parts = {port.port for port in description.ports} | set(setup.held)
         parts |= {chain.scan_in for chain in description.chains}
-        self.free = [name for name in before.inputs if name not in parts]
+        parts |= set(setup.clocks.values())
+        self.free = [name for name in before.inputs if name not in parts and name in after.inputs]
         self.stream: list[list[int]] = []  # scan bits of every shift, by chain
         self.other_states: list[str] = []  # of every round
         self.wanted_states: list[str] = []  # of the original, of every round
@@ -160,6 +161,7 @@ class _Run:
         body = [
             *_calls(self.description.sequences.get("setup", ()), "setup"),
             f"repeat ({self.setup.rounds}) begin",
+            *self._last_of_load(),
             "  load_states;",
             f'  $display("X %b", {state_words(names)});',
             *self._capture_calls(),
@@ -265,7 +267,8 @@ class _Run:
         if cycle.measure:
             outs = ", ".join(side.signal(name) for name in self.before.outputs)
             lines.append(f'$display("O %b", {{{outs}}});')
-        for phase in cycle.pulses:
+        loading = cycle.scan and side is self.before  # its states are set, not shifted
+        for phase in () if loading else cycle.pulses:
             named = self.setup.clocks if side is self.before else {}
             ports = [port for port in (named.get(port, port) for port in phase) if port in known]
             lines += [f"{side.signal(port)} = ~{side.signal(port)};" for port in ports]

@@ -65,6 +65,10 @@ def wrapping_of(cell: Cell) -> Wrapping | None:
 def _shown(cell: Cell) -> tuple[tuple[str, bool], ...]:
     for role in cell.scan:
         if role.style is not Style.MUX_D and role.outputs:
+            # L1 where an output shows it, as it is what captures and what A changes first.
+            first = _output_of(cell, cell.storage[0]) if cell.storage else None
+            if first:
+                return (first,)
             return ((role.outputs[0].pin, role.outputs[0].inverted),)
     found = [_output_of(cell, item) for item in cell.storage]
     return tuple(item for item in found if item) if all(found) else ()
