@@ -4,8 +4,8 @@ The joined bodies are split at every round bracket. Then every other piece is an
 the pieces between (``, .B``) are so few different ones that each is looked at strictly once and
 found in a table afterwards: no call and no match object a pin.
 
-Brackets inside an expression shift the pieces. That shows, since a shifted piece is no proper one,
-and a pattern takes the bodies apart instead, as it does where escaped names have brackets. What
+Where brackets do not come in plain pairs, or escaped names have some, a pattern takes the bodies
+apart instead. What
 that cannot do either is left to the grammar. Nothing between two connections is ever skipped.
 """
 
@@ -23,6 +23,7 @@ from insertdft.netlist import Ids
 NOTHING: Final = ".#())"
 _NO_PIN: Final = "#"
 
+_NO_BRACKETS: Final = bytes(byte for byte in range(256) if byte not in b"()")
 _BETWEEN: Final = re.compile(r"\s*+([;,])\s*+\.\s*+([A-Za-z_\#][\w$]*+\s*+|\\\S++\s++)\Z", re.ASCII)
 #: An escaped name with a bracket in it, which is no bracket.
 _BRACKET_IN_NAME: Final = re.compile(r"\\[^\s()]*+[()]")
@@ -97,7 +98,11 @@ def take_apart(bodies: Sequence[str], table: PinTable) -> Connections | None:
 
 
 def _by_brackets(joined: str, table: PinTable) -> Connections | None:
-    pieces = joined.replace(");", ";").replace(")", "(").split("(")
+    inner = joined.replace(");", ";")
+    brackets = inner.encode("latin-1").translate(None, _NO_BRACKETS)
+    if brackets != b"()" * (len(brackets) // 2):
+        return None
+    pieces = inner.replace(")", "(").split("(")
     expressions = pieces[1::2]
     between = pieces[:-1:2]
     if pieces[-1].strip() != ";" or len(between) != len(expressions):

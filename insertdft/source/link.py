@@ -10,7 +10,18 @@ from typing import NamedTuple
 import numpy as np
 
 from insertdft.diagnostics import nearest
-from insertdft.netlist import OPEN, PRIMITIVES, Header, Ids, Module, Offsets, Port, Vector
+from insertdft.netlist import (
+    CONST0,
+    CONST1,
+    OPEN,
+    PRIMITIVES,
+    Header,
+    Ids,
+    Module,
+    Offsets,
+    Port,
+    Vector,
+)
 from insertdft.netlist.names import KEYWORDS, canonical
 from insertdft.source.complaints import Complaints, word_at
 from insertdft.source.draft import Draft, Tables
@@ -321,9 +332,14 @@ def _bits(count: int) -> str:
 
 
 def _shortest(nets: tuple[int, ...]) -> tuple[int, ...]:
-    """Return a constant without width as narrow as its value lets it be, at least one bit."""
-    used = max((place for place, net in enumerate(nets) if net != 0), default=0)
-    return nets[: used + 1] if any(net > 1 for net in nets) is False else nets[:1]
+    """Return a constant without width as narrow as its value lets it be, at least one bit.
+
+    Zeros in front say nothing, and of several x or z bits in front one says it all.
+    """
+    width = len(nets)
+    while width > 1 and (nets[width - 1] == CONST0 or nets[width - 1] == nets[width - 2] != CONST1):
+        width -= 1
+    return nets[:width]
 
 
 def _check_twice(draft: Draft, names: Ids, row_start: Offsets, linking: Linking) -> None:

@@ -58,17 +58,29 @@ def _body(by: ByGrammar, instance: Node) -> str:
 
 
 def check_parameters(by: ByGrammar, draft: Draft) -> None:
-    """Complain about parameter overrides that are none; their values are of no interest."""
-    checked: set[str] = set()
-    starts = draft.starts
-    for instance, text in draft.parameters.items():
-        if text in checked:
-            continue
-        checked.add(text)
-        start = by.code.find(text, int(starts[instance]))
-        words = by.words(start, start + len(text))
-        if words[1].text == "(":
-            by.parse([_X, *words, *_X_WITHOUT_CONNECTIONS])
+    """Complain about parameter overrides that are none; their values are of no interest.
+
+    What looks like parameters of a gate is its delay, which is dropped.
+    """
+    if not draft.parameters:
+        return
+    cells = tuple(draft.tables.cells)
+    checked: set[tuple[bool, str]] = set()
+    for instance, text in tuple(draft.parameters.items()):
+        is_gate = cells[draft.cells[instance]] in PRIMITIVES
+        if is_gate:
+            del draft.parameters[instance]
+        if (is_gate, text) not in checked:
+            checked.add((is_gate, text))
+            start = by.code.find(text, int(draft.starts[instance]))
+            _check(by, by.words(start, start + len(text)), is_gate=is_gate)
+
+
+def _check(by: ByGrammar, words: list[Token], *, is_gate: bool) -> None:
+    if is_gate:
+        by.skip_strength_and_delay(words, 0)
+    elif words[1].text == "(":
+        by.parse([_X, *words, *_X_WITHOUT_CONNECTIONS])
 
 
 def _fill_empty(words: list[Token]) -> list[Token]:

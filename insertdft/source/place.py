@@ -112,7 +112,7 @@ _PLAIN: Final = re.compile(
     \s*+((?:[\w$':]++(?:\[[\d:]++\])?+|\\\S++(?:\s++\[[\d:]++\])?+)?+)\s*+\)""",
     re.ASCII | re.VERBOSE,
 )
-_NAMED: Final = re.compile(rf"{GAP},?+{GAP}(\.)\s*+({NAME}){GAP}\({GAP}", re.ASCII)
+_NAMED: Final = re.compile(rf"{GAP},?+{GAP}(\.){GAP}({NAME}){GAP}\({GAP}", re.ASCII)
 _DELAY: Final = re.compile(rf"{GAP}(?:\d[\w.']*+|`?{NAME})", re.ASCII)
 _PAREN: Final = re.compile(rf"{GAP}\(", re.ASCII)
 _CLOSING: Final = re.compile(rf"{GAP}\)", re.ASCII)

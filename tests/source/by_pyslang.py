@@ -140,6 +140,8 @@ class _Module:
         match _kind(node):
             case "IntegerLiteralExpression":
                 return int(node.literal.valueText.replace("_", ""))
+            case "UnaryPlusExpression":
+                return self._integer(node.operand)
             case "UnaryMinusExpression":
                 return -self._integer(node.operand)
             case "AddExpression":

@@ -4,6 +4,7 @@ The other readers (``by_pyslang``, ``by_pyverilog``) walk their own trees and gi
 ``expand`` gives each connection its bits. ``ours`` brings our columns into the same form.
 """
 
+import re
 from dataclasses import dataclass, field
 
 from insertdft.netlist import FIRST_NET, OPEN, PRIMITIVES, Module, Netlist
@@ -126,8 +127,9 @@ def _rows(connection: RawConnection, module: RawModule | None) -> list[tuple[str
     if bits is None:
         return [(head, None)]
     if not connection.sized:
-        while len(bits) > 1 and bits[-1][0] == "0":
-            bits = bits[:-1]
+        text = "".join(bit[0] for bit in reversed(bits)).lstrip("0") or "0"
+        text = re.sub(r"^(x+|z+)", lambda run: run[0][0], text)
+        bits = tuple((bit, None) for bit in reversed(text))
     if len(bits) == 1:
         return [(head, bits[0])]
     return [(f"{head}[{place}]", bit) for place, bit in enumerate(bits)]
