@@ -83,14 +83,28 @@ def test_a_processor_shifts_and_captures_like_the_original(
     assert outcome.others == 0
 
 
-def test_the_demo_chip_shifts_and_captures_like_the_original(tmp_path: Path) -> None:
+@pytest.mark.parametrize("capture", ["capture", "launch_on_capture", "launch_on_shift"])
+@pytest.mark.parametrize("style", ["mux-d", "clocked-scan"])
+def test_the_demo_chip_shifts_and_captures_like_the_original(
+    style: str, capture: str, tmp_path: Path
+) -> None:
     tech = technology("demo")
-    done = convert((DEMO / "demo_chip.v").read_text(encoding="utf-8"), tech, 8)
+    done = convert((DEMO / "demo_chip.v").read_text(encoding="utf-8"), tech, 8, style)
 
-    outcome = done.simulated(tech, tmp_path, Setup(held=PHASES_OFF))
+    outcome = done.simulated(tech, tmp_path, Setup(held=PHASES_OFF, capture=capture, rounds=2))
 
-    assert_same(outcome, 4 * 370)
+    assert_same(outcome, 2 * 370)
     assert outcome.others > 0
+
+
+@pytest.mark.parametrize("capture", ["capture", "launch_on_capture", "launch_on_shift"])
+def test_a_processor_of_latch_pairs_in_level_sensitive_scan(capture: str, tmp_path: Path) -> None:
+    tech = technology("demo")
+    done = convert(core_netlist("serv", tech, latches=True), tech, 4, "lssd")
+
+    outcome = done.simulated(tech, tmp_path, Setup(capture=capture))
+
+    assert_same(outcome, 4 * 165)
 
 
 def test_two_captures_at_speed_do_what_the_original_does_in_two_cycles(tmp_path: Path) -> None:

@@ -11,6 +11,7 @@ from pathlib import Path
 import pytest
 from scan_bench import Outcome, Setup, simulate
 from technologies import technology
+from yosys_runs import equivalent
 
 from insertdft.description import Chain, ChainCell, Cycle, Description, TestPort
 from insertdft.styles.lssd_sequences import Form, LssdClocks, lssd_sequences
@@ -208,3 +209,33 @@ def test_the_bench_notices_a_mistake_of_the_hand(mistake: str, tmp_path: Path) -
     outcome = case.compared(tmp_path, before, spoil(after))
 
     assert outcome.mismatches
+
+
+WHOLE_PAIR = (
+    "srl_double_w1 master0 "
+    "(.D(d0), .C(phase_1), .I(scan_in), .A(clk_a), .B(phase_2), .L2(s0), .L2N());"
+)
+FIRST_AND_SLAVE = """
+  wire m0;
+  srl_first_w1 master0 (.D(d0), .C(phase_1), .I(scan_in), .A(clk_a), .L1(m0), .L1N());
+  latch_w1 slave0 (.D(m0), .G(phase_2), .Q(s0), .QN());
+"""
+
+
+@pytest.mark.parametrize(
+    ("name", "at_rest"), [("double latch", ("clk_a",)), ("single latch", ("clk_a", "clk_b"))]
+)
+def test_yosys_proves_mission_mode_with_the_shift_clocks_at_rest(
+    name: str, at_rest: tuple[str, ...]
+) -> None:
+    case, models = CASES[name], technology("demo").models
+    before, after = ((BY_HAND / f"{file}.v").read_text() for file in (case.before, case.after))
+    # With its L1 hidden inside, the whole cell could only be matched while the phases are apart.
+    after = after.replace(WHOLE_PAIR, FIRST_AND_SLAVE)
+    tied, hidden = dict.fromkeys(at_rest, 0), ["scan_in", "scan_out"]
+
+    def verdict(text: str) -> bool | None:
+        return equivalent(before, text, case.before, models, tied=tied, hidden=hidden)
+
+    assert verdict(after) is True
+    assert verdict(swapped(after, "nand2_w1", "nor2_w1")) is False
