@@ -151,6 +151,7 @@ def convert(
     patches = apply_plan(design, plan)
     description = describe(plan, design.netlist)
     say("tracing the chains in the new text")
+    design.drop_indices()
     traced = trace(read_again(patches, design), description)
     out = {at.instance for at in plan.left_alone}
     # A finding about cells that were converted all the same (a gated system clock is no matter to

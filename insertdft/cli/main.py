@@ -4,6 +4,7 @@ Exit codes: 0 done, and what was checked holds; 1 the input has errors, or a che
 usage; 3 a defect of insertdft itself.
 """
 
+import gc
 import importlib
 import os
 import sys
@@ -71,6 +72,8 @@ def run(words: list[str] | None = None) -> None:
     Args:
         words: Arguments; those of the process by default.
     """
+    # One command makes millions of small values and no garbage in cycles worth a search.
+    gc.disable()
     try:
         code = main.main(words, standalone_mode=False, prog_name="insertdft")
         sys.exit(code if isinstance(code, int) else DONE)

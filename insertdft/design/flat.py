@@ -214,6 +214,14 @@ class Design:
         """Spelling of the input or inout port bit that drives a net."""
         return {port.net: port.name for port in self.ports if port.direction != "output"}
 
+    def drop_indices(self) -> None:
+        """Give back the memory of everything that is worked out when first asked for.
+
+        It is worked out again when it is asked for again.
+        """
+        for name in ("pin_instance", "drivers", "loads", "_nets_at", "_paths"):
+            self.__dict__.pop(name, None)
+
     def net_name(self, net: int) -> str:
         """Return the hierarchical name of a flat net: the outermost of its aliases.
 
