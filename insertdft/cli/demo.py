@@ -33,7 +33,7 @@ def command(ctx: click.Context, out: Path) -> int:
             name: (folder / name).read_text(encoding="latin-1") for name in (CHIP, LIBRARY, MODELS)
         }
     write_all(out, texts, [])
-    words = ["--chains", "6", "--out", str(out / "scan")]
+    words = ["--chains", "7", "--latches", "lssd", "--out", str(out / "scan")]
     words = [str(out / CHIP), "--lib", str(out / LIBRARY), *words]
     click.echo(f"$ insertdft convert {' '.join(words)}\n")
     code: int = convert.main(words, standalone_mode=False, parent=ctx)

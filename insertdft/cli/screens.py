@@ -12,6 +12,8 @@ from insertdft.survey import LEFT_ALONE, Survey
 
 #: Chains shown one by one; of more, the longest and the shortest are.
 MOST_CHAINS: Final = 10
+#: Characters that a line of the summary may have behind its label.
+WIDTH: Final = 80
 
 
 def conversion_data(done: Conversion, files: Sequence[str]) -> dict[str, Any]:
@@ -139,14 +141,18 @@ def _cell(text: str, width: int, is_number: bool) -> str:
 
 
 def _ways(ways: Sequence[Mapping[str, Any]]) -> str:
-    words = []
-    for way in ways[:4]:
+    """Return how cells were converted, the most frequent ways first, on one line."""
+    text = ""
+    for number, way in enumerate(ways):
         goal = {"twin": f"to {way['to']}", "as-is": "as they are"}.get(
             way["how"], f"with {' + '.join(way['with'])}"
         )
-        words.append(f"{way['count']} {way['cell']} {goal}")
-    more = sum(way["count"] for way in ways[4:])
-    return "; ".join(words) + (f"; {more} of other kinds" if more else "")
+        words = f"{'; ' if text else ''}{way['count']} {way['cell']} {goal}"
+        if text and len(text) + len(words) > WIDTH:
+            rest = sum(other["count"] for other in ways[number:])
+            return f"{text}; {rest} of {len(ways) - number} other kinds"
+        text += words
+    return text
 
 
 def _reasons(reasons: Mapping[str, int]) -> str:
