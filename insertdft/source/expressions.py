@@ -57,7 +57,8 @@ class Scope(NamedTuple):
 
 
 _PLAIN: Final = re.compile(
-    rf"\s*+({NAME})\s*+(?:\[\s*+(-?\d++)\s*+(?:(:|\+:|-:)\s*+(-?\d++)\s*+)?+\])?+\s*+\Z", re.ASCII
+    rf"\s*+({NAME})\s*+(?:\[\s*+(-?\s*+\d++)\s*+(?:(:|\+:|-:)\s*+(-?\s*+\d++)\s*+)?+\])?+\s*+\Z",
+    re.ASCII,
 )
 _SIZED: Final = re.compile(
     r"\s*+(?:(\d[\d_]*+)\s*+)?+'\s*+[sS]?+([bBoOdDhH])\s*+([0-9a-fA-FxXzZ?_]++)\s*+\Z", re.ASCII
@@ -120,15 +121,19 @@ def _select(scope: Scope, raw: str, first: str | None, how: str | None, second: 
         return Bits(tuple(range(vector.base, vector.base + vector.width)))
     if vector is None:
         raise _no_vector(scope, name)
-    start = stop = int(first)
+    start = stop = _integer(first)
     if how == ":":
-        stop = int(second or 0)
+        stop = _integer(second or "0")
     elif how:
         # `[b +: w]` goes w bits up from b, `[b -: w]` down, whichever way the range is declared.
-        last = start + (int(second or 0) - 1) * (1 if how == "+:" else -1)
+        last = start + (_integer(second or "0") - 1) * (1 if how == "+:" else -1)
         low, high = min(start, last), max(start, last)
         start, stop = (high, low) if vector.msb >= vector.lsb else (low, high)
     return Bits(_slice(name, start, stop, scope))
+
+
+def _integer(text: str) -> int:
+    return int("".join(text.split()))  # a blank may stand behind the sign
 
 
 def _slice(name: str, msb: int, lsb: int, scope: Scope) -> tuple[int, ...]:
