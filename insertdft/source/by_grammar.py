@@ -83,13 +83,15 @@ class ByGrammar:
 
     def skip_strength_and_delay(self, words: list[Token], at: int) -> int:
         """Return the index behind a drive strength and a delay, if they stand at ``at``."""
+        if at >= len(words) - 1:
+            return at
         if words[at].text == "(" and words[at + 1].text in _STRENGTHS:
             closing = self.closing(words, at)
             inside = split_commas(words[at + 1 : closing])
             if any(len(part) != 1 or part[0].text not in _STRENGTHS for part in inside):
                 self.no_verilog(words[at].start)
             at = closing + 1
-        if words[at].text == "#":
+        if at < len(words) - 1 and words[at].text == "#":
             if words[at + 1].text != "(":
                 self._check_delay([words[at + 1]], words[at + 1])
                 return at + 2

@@ -88,11 +88,11 @@ class _Ports:
     def names(self, words: list[Token]) -> list[Token]:
         """Return the list with nothing but names in it."""
         names: list[Token] = []
+        at = words[0].start if words else 0
         for part in split_commas(words):
-            if names:
-                names.append(Token("operator", ",", names[-1].end, names[-1].end))
-            names += self._name(part)
-        return names
+            names += [*self._name(part), Token("operator", ",", at, at)]
+            at = part[-1].end if part else at
+        return names[:-1]
 
     def declare(self) -> None:
         """Enter what the list itself declares."""

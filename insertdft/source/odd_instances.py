@@ -78,7 +78,8 @@ def check_parameters(by: ByGrammar, draft: Draft) -> None:
 
 def _check(by: ByGrammar, words: list[Token], *, is_gate: bool) -> None:
     if is_gate:
-        by.skip_strength_and_delay(words, 0)
+        if by.skip_strength_and_delay(words, 0) < len(words):
+            by.no_verilog(words[-1].start)
     elif words[1].text == "(":
         by.parse([_X, *words, *_X_WITHOUT_CONNECTIONS])
 

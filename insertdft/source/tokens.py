@@ -73,13 +73,22 @@ def tokens(code: str, start: int, end: int, macros: Mapping[str, str]) -> Iterat
             yield Token(kind, match[0], match.start(), at)
 
 
+_CLOSES: Final = {")": "(", "]": "[", "}": "{"}
+
+
 def matching(words: list[Token], opening: int) -> int:
-    """Return the index of the ``)`` that closes the ``(`` at index ``opening``, or -1."""
-    depth = 0
+    """Return the index of the bracket that closes the one at index ``opening``, or -1."""
+    stack: list[str] = []
     for index in range(opening, len(words)):
-        if words[index].kind == "operator":
-            depth += (words[index].text in "([{") - (words[index].text in ")]}")
-            if depth == 0:
+        text = words[index].text
+        if words[index].kind != "operator":
+            continue
+        if text in "([{":
+            stack.append(text)
+        elif text in _CLOSES:
+            if not stack or stack.pop() != _CLOSES[text]:
+                return -1
+            if not stack:
                 return index
     return -1
 
