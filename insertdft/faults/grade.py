@@ -14,7 +14,7 @@ import numpy.typing as npt
 from insertdft.faults.access import Access
 from insertdft.faults.collapse import FaultList
 from insertdft.faults.network import Network, make_network
-from insertdft.faults.observe import Observed, observe
+from insertdft.faults.observe import TOGETHER, Observed, observe
 from insertdft.faults.sites import BLIND, PIN, PORT
 from insertdft.netlist import Ids
 from insertdft.simulate.bits import Evaluator
@@ -119,8 +119,22 @@ def _block_sizes(patterns: int, slots: int) -> list[int]:
 class Grader:
     """Fault simulation block by block, remembering what is detected."""
 
-    def __init__(self, faults: FaultList, access: Access, chosen: Ids | None = None) -> None:
-        """Start with nothing detected."""
+    def __init__(
+        self,
+        faults: FaultList,
+        access: Access,
+        chosen: Ids | None = None,
+        together: int = TOGETHER,
+    ) -> None:
+        """Start with nothing detected.
+
+        Args:
+            faults: Fault list of the access's circuit.
+            access: What a test can set and see.
+            chosen: Classes to simulate; all if not given.
+            together: How many changes to follow at once; only speed depends on it.
+        """
+        self._together = together
         self._faults, self._access = faults, access
         self._network: Network = make_network(access)
         self._evaluator = Evaluator(access.circuit, 2 if len(access.unknown) else 1)
@@ -164,7 +178,7 @@ class Grader:
         )
         wanted = np.zeros(sites.circuit.slots, np.bool_)
         wanted[self._network.root[at]] = True
-        found = observe(self._network, self._evaluator, values, wanted)
+        found = observe(self._network, self._evaluator, values, wanted, self._together)
         opposite = _opposite(values, sites.slot[site], stuck) & mask
         seen = _seen(self._network, found, sites.kind[site], sites.slot[site], sites.edge[site])
         hits = opposite & seen

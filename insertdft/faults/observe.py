@@ -5,7 +5,7 @@ on and a change of the node is seen. That is exact within a region without fan-o
 the change is followed forward (``events``).
 """
 
-from typing import NamedTuple
+from typing import Final, NamedTuple
 
 import numpy as np
 
@@ -17,7 +17,7 @@ from insertdft.simulate.circuit import Group
 from insertdft.simulate.words import ONES, Flags, Words, differs, inverse
 
 #: Joint roots that are followed together: enough to keep numpy busy, few enough for the cache.
-_TOGETHER = 2048
+TOGETHER: Final = 2048
 
 
 class Observed(NamedTuple):
@@ -34,7 +34,13 @@ class Observed(NamedTuple):
     valid: Flags
 
 
-def observe(network: Network, evaluator: Evaluator, values: Words, wanted: Flags) -> Observed:
+def observe(
+    network: Network,
+    evaluator: Evaluator,
+    values: Words,
+    wanted: Flags,
+    together: int = TOGETHER,
+) -> Observed:
     """Return in which patterns a change of each slot, or of one reader alone, is seen.
 
     Args:
@@ -42,6 +48,7 @@ def observe(network: Network, evaluator: Evaluator, values: Words, wanted: Flags
         evaluator: Functions.
         values: Fault-free values of all slots.
         wanted: Joint roots that matter, shape (slots,).
+        together: How many joint roots to follow at once, about; only speed depends on it.
     """
     circuit, words = network.circuit, values.shape[-1]
     found = Observed(
@@ -55,7 +62,7 @@ def observe(network: Network, evaluator: Evaluator, values: Words, wanted: Flags
     groups = list(circuit.groups)
     done = circuit.depth + 1  # levels from here on are finished
     while done > 0:
-        floor, batch = _next_batch(network, roots, done)
+        floor, batch = _next_batch(network, roots, done, together)
         roots = roots[: len(roots) - len(batch)]
         _follow_batch(network, evaluator, values, batch, found, done)
         for level in range(done - 1, floor - 1, -1):
@@ -66,11 +73,11 @@ def observe(network: Network, evaluator: Evaluator, values: Words, wanted: Flags
     return found
 
 
-def _next_batch(network: Network, roots: Ids, done: int) -> tuple[int, Ids]:
+def _next_batch(network: Network, roots: Ids, done: int, together: int) -> tuple[int, Ids]:
     """Return the lowest level of the next batch, and its roots (the last ones of ``roots``)."""
-    if len(roots) <= _TOGETHER:
+    if len(roots) <= together:
         return 0, roots
-    floor = int(network.circuit.level[roots[-_TOGETHER]])
+    floor = int(network.circuit.level[roots[-together]])
     first = int(np.searchsorted(roots, network.level_start[floor]))
     return min(floor, done - 1), roots[first:]
 
@@ -87,8 +94,8 @@ def _follow_batch(
     settled[: network.level_start[min(done, len(network.level_start) - 1)]] = False
     settled |= network.seen
     known = Known(settled, found.slot)
-    for begin in range(0, len(batch), 2 * _TOGETHER):
-        some = batch[begin : begin + 2 * _TOGETHER]
+    for begin in range(0, len(batch), 2 * TOGETHER):
+        some = batch[begin : begin + 2 * TOGETHER]
         found.slot[some] = follow(network, evaluator, values, some, known)
     is_done = np.zeros(network.circuit.slots, np.bool_)
     is_done[batch] = True

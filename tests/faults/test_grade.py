@@ -8,12 +8,15 @@ from outside import outside
 
 from insertdft.faults.access import full_access, scan_access
 from insertdft.faults.collapse import FaultList, make_faults
-from insertdft.faults.grade import Grade, grade_patterns, grade_random, sample
+from insertdft.faults.grade import Grade, Grader, grade_patterns, grade_random, sample
+from insertdft.faults.observe import TOGETHER
 from insertdft.simulate.lower import make_circuit
 from insertdft.simulate.words import random_words
 
 
-def graded(gates: Gates, scanned: float, seed: int) -> tuple[Grade, list[int]]:
+def graded(
+    gates: Gates, scanned: float, seed: int, together: int = TOGETHER
+) -> tuple[Grade, list[int]]:
     """Return what the product and the reference say, for a share of scanned flip-flops."""
     design = design_of(gates.verilog())
     circuit = make_circuit(design)
@@ -24,8 +27,10 @@ def graded(gates: Gates, scanned: float, seed: int) -> tuple[Grade, list[int]]:
     observe = [i for i in control if chance.random() < 0.9] if scanned < 1 else control
     access = scan_access(circuit, control, observe, {"clk": 0})
     bits = random_words(chance, (len(access.free), 3))
+    grader = Grader(faults, access, together=together)
+    grader.apply(bits, 150)
     return (
-        grade_patterns(faults, access, bits, 150),
+        grader.result(),
         OneAtATime(gates, access, bits, 150).detected_at(faults),
     )
 
@@ -39,6 +44,19 @@ def test_each_fault_is_first_detected_where_it_is_alone(seed: int, scanned: floa
 
     assert grade.detected_at.tolist() == reference
     assert 0 < grade.detected < grade.faults.collapsed
+
+
+@pytest.mark.parametrize("together", [1, 5, 40])
+@pytest.mark.parametrize("scanned", [1.0, 0.6])
+@pytest.mark.parametrize("seed", [21, 22, 23])
+def test_what_is_known_of_a_joint_may_be_used_before_it(
+    seed: int, scanned: float, together: int
+) -> None:
+    gates = random_gates(seed, inputs=8, flops=10, gates=150, outputs=1)
+
+    grade, reference = graded(gates, scanned, seed, together)
+
+    assert grade.detected_at.tolist() == reference
 
 
 @pytest.mark.parametrize("name", ["c432", "s298", "s820"])

@@ -51,9 +51,9 @@ def test_each_fault_is_first_detected_where_it_is_alone(seed: int) -> None:
     faults = make_faults(make_circuit(design_of(gates.verilog())))
     chosen = np.arange(faults.collapsed, dtype=np.int32)
 
-    found = grade_unscanned(faults, 40, seed, chosen, held={"clk": 0})
+    found = grade_unscanned(faults, 25, seed, chosen, held={"clk": 0})
 
-    rows = vectors(faults, gates, 40, seed)
+    rows = vectors(faults, gates, 25, seed)
     order, first = gates.order(), faults.first.tolist()
     expected = [detected_at(faults, gates, order, fault, rows) for fault in first]
     assert found.detected_at.tolist() == expected
@@ -79,8 +79,8 @@ def test_a_sample_estimates_the_whole_within_its_stated_error() -> None:
     faults = make_faults(make_circuit(design_of(gates.verilog())))
     every = np.arange(faults.collapsed, dtype=np.int32)
 
-    part = grade_unscanned(faults, 60, 1, sample(faults, 200, 3), held={"clk": 0})
-    whole = grade_unscanned(faults, 60, 1, every, held={"clk": 0})
+    part = grade_unscanned(faults, 30, 1, sample(faults, 200, 3), held={"clk": 0})
+    whole = grade_unscanned(faults, 30, 1, every, held={"clk": 0})
 
     assert part.error > 0
     assert abs(part.coverage - whole.coverage) <= part.error

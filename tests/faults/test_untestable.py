@@ -83,7 +83,7 @@ def test_a_redundant_gate_is_found_and_its_twin_without_redundancy_is_not() -> N
 
 
 def test_a_search_that_is_given_up_says_so() -> None:
-    gates = random_gates(11, inputs=12, flops=0, gates=400, outputs=1)
+    gates = random_gates(11, inputs=12, flops=0, gates=200, outputs=1)
     circuit = make_circuit(design_of(gates.verilog()))
     faults, access = make_faults(circuit), full_access(circuit, {"clk": 0})
     left = grade_random(faults, access, 2000, seed=1).undetected().tolist()
