@@ -99,6 +99,11 @@ SLUGS: Final[dict[str, str]] = {
     "description-unreadable": "The chain description is not valid",
     # compare
     "timing-no-tables": "The library has no delay tables for the cells of the design",
+    # exports
+    "export-mismatch": "The chain description does not fit the netlist that is exported",
+    "timing-overlap": "The edges of a tester cycle overlap or do not fit into its period",
+    "order-unreadable": "A file with an order of chains cannot be read",
+    "order-illegal": "An order of chains holds other cells, or moves one where it may not go",
     # writing
     "output-exists-as-input": "An output would overwrite an input",
     "output-unwritable": "An output cannot be written",
