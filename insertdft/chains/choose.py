@@ -154,7 +154,10 @@ def _choose_lssd(
     if not leaves:
         return LssdChoice()
     held = {item.port: item.value for item in (*survey.held, *survey.set_resets)}
-    choice = choose_lssd(survey.design, leaves, held, wishes)
+    pairs = zip(survey.storage.tolist(), survey.domain.tolist(), strict=True)
+    falls = {number for number, at in enumerate(survey.domains) if at.edge == "fall"}
+    falling = {leaf for leaf, domain in pairs if domain in falls}
+    choice = choose_lssd(survey.design, leaves, held, wishes, falling)
     numbers: dict[int, int] = {}
     for leaf, conversion in choice.conversion.items():
         if id(conversion) not in numbers:

@@ -1,7 +1,7 @@
 """Choose LSSD conversions: which latches and flip-flops make a position, and how."""
 
 from collections import defaultdict
-from collections.abc import Callable, Sequence
+from collections.abc import Callable, Collection, Sequence
 from dataclasses import dataclass, field
 
 from insertdft.chains.pairing import SystemLatch, pair_latches
@@ -56,6 +56,11 @@ _GATED = Refusal(
     "left alone: logic can keep the slave's clock off while the chain shifts",
     "gate the master's clock instead, or hold the port that opens the gate with --hold",
 )
+_LATE = Refusal(
+    "negative-edge-in-lssd",
+    "left alone: it takes data at the falling edge, and its clock at rest would leave C on",
+    "keep its edge with --flip-flops edge, or give it a clock port of its own",
+)
 _COPY = Refusal(
     "latch-copy",
     "left alone: it copies the state of a latch pair that is in a chain",
@@ -70,15 +75,22 @@ class _Makers:
         self._design = design
         self._wishes = wishes
         self._made: dict[tuple[str, str], Conversion | Refusal] = {}
+        self._taken = {*design.netlist.modules, *design.netlist.cell_names, *design.library.cells}
 
     def first(self, leaf: int) -> Conversion | Refusal:
-        return self._make("first", leaf, lambda cell: first_latch(self._design.library, cell))
+        return self._make(
+            "first", leaf, lambda cell: first_latch(self._design.library, cell, self._taken)
+        )
 
     def second(self, leaf: int) -> Conversion | Refusal:
-        return self._make("second", leaf, lambda cell: second_latch(self._design.library, cell))
+        return self._make(
+            "second", leaf, lambda cell: second_latch(self._design.library, cell, self._taken)
+        )
 
     def single(self, leaf: int) -> Conversion | Refusal:
-        return self._make("single", leaf, lambda cell: single_latch(self._design.library, cell))
+        return self._make(
+            "single", leaf, lambda cell: single_latch(self._design.library, cell, self._taken)
+        )
 
     def slave(self, leaf: int, inverted: bool) -> Conversion | Refusal:
         return self._make(f"slave {inverted}", leaf, lambda cell: slave_latch(cell, inverted))
@@ -86,7 +98,7 @@ class _Makers:
     def flip_flop(self, leaf: int) -> Conversion | Refusal:
         form = self._wishes.flip_flops
         return self._make(
-            "flip-flop", leaf, lambda cell: flip_flop(self._design.library, cell, form)
+            "flip-flop", leaf, lambda cell: flip_flop(self._design.library, cell, form, self._taken)
         )
 
     def _make(
@@ -102,7 +114,11 @@ class _Makers:
 
 
 def choose_lssd(
-    design: Design, leaves: Sequence[int], held: dict[str, int], wishes: Wishes
+    design: Design,
+    leaves: Sequence[int],
+    held: dict[str, int],
+    wishes: Wishes,
+    falling: Collection[int],
 ) -> LssdChoice:
     """Return the positions that the given latches and flip-flops make.
 
@@ -111,6 +127,7 @@ def choose_lssd(
         leaves: Storage cells that are to be LSSD, in source order.
         held: Ports with the values they have in test.
         wishes: The user's.
+        falling: Leaves that take data at the falling edge of their clock port.
     """
     choice = LssdChoice()
     wanted = set(leaves)
@@ -128,7 +145,8 @@ def choose_lssd(
     wanted -= set(singles)
     for leaf in leaves:
         if leaf in wanted:
-            _keep(choice, leaf, makers.flip_flop(leaf))
+            late = leaf in falling and wishes.flip_flops == "two-phase"
+            _keep(choice, leaf, _LATE if late else makers.flip_flop(leaf))
     return choice
 
 

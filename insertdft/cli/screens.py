@@ -66,6 +66,7 @@ def _converted(done: Conversion) -> list[dict[str, Any]]:
     for number, count in ways.most_common():
         way = done.plan.conversions[number]
         parts = [part.cell for part in way.parts]
+        parts += [f"{len(way.module.parts)} gates"] if way.module else []
         found.append(
             {"cell": way.before, "how": way.how, "to": way.after, "with": parts, "count": count}
         )
@@ -144,7 +145,7 @@ def _ways(ways: Sequence[Mapping[str, Any]]) -> str:
     """Return how cells were converted, the most frequent ways first, on one line."""
     text = ""
     for number, way in enumerate(ways):
-        goal = {"twin": f"to {way['to']}", "as-is": "as they are"}.get(
+        goal = {"twin": f"to {way['to']}", "module": f"to {way['to']}", "as-is": "as they are"}.get(
             way["how"], f"with {' + '.join(way['with'])}"
         )
         words = f"{'; ' if text else ''}{way['count']} {way['cell']} {goal}"

@@ -8,6 +8,7 @@ import numpy as np
 import numpy.typing as npt
 
 from insertdft.design.flat import INOUT, INPUT, OUTPUT, UNKNOWN
+from insertdft.design.gate_storage import storage_module
 from insertdft.diagnostics import Diagnostic, Severity, nearest
 from insertdft.library.cell import Cell, Library
 from insertdft.library.primitives import primitive_cell
@@ -24,7 +25,8 @@ class Linked:
         cell_names: See ``Design``.
         cells: See ``Design``.
         pin_names: See ``Design``.
-        is_module: Shape (len(cell_names),), whether the entry is a module of the netlist.
+        is_module: Shape (len(cell_names),), whether the entry is a module of the netlist that is
+            opened (one that is storage made of gates is a cell instead).
         instance_cell: By module, shape (n,), ids into ``cell_names``.
         pin_name: By module, shape (m,), ids into ``pin_names``.
         pin_direction: By module, shape (m,).
@@ -66,7 +68,10 @@ class _Tables:
 
 
 def _library_cell(netlist: Netlist, library: Library, name: str) -> Cell | None:
-    return None if name in netlist.modules else library.cells.get(name)
+    """Return the library's cell; of a module, the cell that its gates amount to, if any."""
+    if name in netlist.modules:
+        return storage_module(netlist, library, netlist.modules[name])
+    return library.cells.get(name)
 
 
 def link_pins(netlist: Netlist, library: Library) -> tuple[Linked, list[Diagnostic]]:
@@ -81,7 +86,8 @@ def link_pins(netlist: Netlist, library: Library) -> tuple[Linked, list[Diagnost
         linked = _pins_of(tables, module, cells[module.name], found)
         names[module.name], directions[module.name] = linked
     found += _black_boxes(tables, cells)
-    is_module = np.array([name in netlist.modules for name in tables.cell_names], bool)
+    pairs = zip(tables.cell_names, tables.cells, strict=True)
+    is_module = np.array([cell is None and name in netlist.modules for name, cell in pairs], bool)
     return (
         Linked(
             cell_names=tuple(tables.cell_names),
@@ -135,7 +141,7 @@ def _pins_of(
 def _resolve(tables: _Tables, cell_id: int, pin: str) -> tuple[str, int] | str:
     """Return pin name and direction, or the slug of what is wrong."""
     cell = tables.cells[cell_id]
-    if cell is None or tables.cell_names[cell_id] in tables.netlist.modules:
+    if cell is None:
         return pin, UNKNOWN
     if pin in cell.pins:
         return pin, DIRECTIONS[cell.pins[pin].direction]

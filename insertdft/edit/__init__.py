@@ -8,6 +8,7 @@ from insertdft.diagnostics import DesignError, Diagnostic, error
 from insertdft.edit.module import module_splices
 from insertdft.library.cell import Library
 from insertdft.netlist import Netlist
+from insertdft.styles.gates import to_verilog
 from insertdft.text import Patch, Splice
 
 __all__ = ["make_patches"]
@@ -28,6 +29,12 @@ def make_patches(netlist: Netlist, library: Library, plan: Plan) -> tuple[Patch,
     for name in plan.modules:
         module = netlist.modules[name]
         by_source[module.source.name] += module_splices(netlist, library, plan, module)
+    composed = {at.module.name: at.module for at in plan.conversions if at.module is not None}
+    if composed:
+        home = netlist.modules[plan.design].source
+        text = "".join(f"\n{to_verilog(composed[name])}" for name in sorted(composed))
+        end = len(home.text)
+        by_source[home.name].append(Splice(end, end, text, "composed scan cells"))
     return tuple(Patch(source, tuple(by_source[source.name])) for source in netlist.sources)
 
 

@@ -3,8 +3,8 @@
 from typing import NamedTuple
 
 from insertdft.library.cell import Cell, ScanRole, Storage, StorageKind, Style
-from insertdft.library.expression import Expression, Not, Var
-from insertdft.simulate.paths import Source, Walker, pin_and_parity
+from insertdft.library.expression import Expression, Not, Var, variables
+from insertdft.simulate.paths import Source, Walker
 
 
 class Step(NamedTuple):
@@ -17,9 +17,10 @@ class Step(NamedTuple):
         entry: Pin that shift data enters by.
         entry_inverted: Whether the state becomes the inverse of that pin.
         net: Net at that pin.
-        is_latch: Whether it is a single latch, as a lock-up is.
+        is_latch: Whether it is a single latch, as a lock-up or half of an LSSD position is.
         bits: Shift cycles through it.
-        scan_clock: Net that clocks the scan port of a two-port latch, -1 for other cells.
+        opened_by: Nets that decide when the element that takes the data is open; empty where
+            nobody asked.
     """
 
     instance: int
@@ -30,7 +31,7 @@ class Step(NamedTuple):
     net: int
     is_latch: bool
     bits: int
-    scan_clock: int = -1
+    opened_by: tuple[int, ...] = ()
 
 
 def step_into(walker: Walker, source: Source) -> Step | None:
@@ -42,34 +43,60 @@ def step_into(walker: Walker, source: Source) -> Step | None:
     cell = walker.design.cell_of(source.instance)
     if cell is None:
         return None
-    if len(cell.storage) == 1 and cell.storage[0].bits == 1:
-        found = _by_function(walker, source, cell, cell.storage[0])
-        if found is not None:
-            return found
-    return _by_role(walker, source, cell)
+    return _by_function(walker, source, cell) or _by_role(walker, source, cell)
 
 
-def _by_function(walker: Walker, source: Source, cell: Cell, storage: Storage) -> Step | None:
-    shown = _shows_inverse(cell.pins[source.pin].function, storage)
-    if storage.data is None or shown is None:
+def _by_function(walker: Walker, source: Source, cell: Cell) -> Step | None:
+    """Follow the data from the state that an output shows back to a pin, through all states."""
+    by_state = {name: item for item in cell.storage for name in _names(item)}
+    function = cell.pins[source.pin].function
+    shown = _literal(None if function is None else walker.literal(source.instance, function))
+    if shown is None or shown[0] not in by_state:
         return None
-    literal = walker.literal(source.instance, storage.data)
-    found = pin_and_parity(walker.design, source.instance, literal)
-    inner = literal.part if isinstance(literal, Not) else literal
-    if found is None or not isinstance(inner, Var):
+    here = by_state[shown[0]]
+    shows_inverse = shown[1] ^ (shown[0] == here.state_inverted)
+    met = [here]
+    inverted = False
+    while True:
+        data = None if here.data is None else walker.literal(source.instance, here.data)
+        found = _literal(data)
+        if found is None:
+            return None
+        name, turned = found
+        inverted ^= turned
+        if name not in by_state:
+            break
+        here = by_state[name]
+        inverted ^= name == here.state_inverted
+        if here in met:
+            return None
+        met.append(here)
+    net = walker.design.net_at(source.instance, name)
+    if net < 0:
         return None
-    is_latch = storage.kind is StorageKind.LATCH
-    net, inverted = found
-    return Step(source.instance, source.pin, shown, inner.name, inverted, net, is_latch, 1)
+    edges = sum(item.kind is StorageKind.FLIP_FLOP for item in met)
+    opened = variables(here.clock) if here.clock else ()
+    return Step(
+        source.instance,
+        source.pin,
+        shows_inverse,
+        name,
+        inverted,
+        net,
+        edges == 0 and len(met) == 1,
+        max(edges, 1),
+        tuple(walker.design.net_at(source.instance, pin) for pin in opened),
+    )
 
 
-def _shows_inverse(function: Expression | None, storage: Storage) -> bool | None:
-    """Return whether an output is the inverse of the state, None if it is something else."""
-    inverted = isinstance(function, Not)
-    inner = function.part if isinstance(function, Not) else function
-    if inner == Var(storage.state):
-        return inverted
-    return not inverted if inner == Var(storage.state_inverted) else None
+def _names(storage: Storage) -> tuple[str, str]:
+    return storage.state, storage.state_inverted
+
+
+def _literal(expression: Expression | None) -> tuple[str, bool] | None:
+    """Return name and inversion of an expression that is one, None for any other."""
+    inner = expression.part if isinstance(expression, Not) else expression
+    return (inner.name, isinstance(expression, Not)) if isinstance(inner, Var) else None
 
 
 def _by_role(walker: Walker, source: Source, cell: Cell) -> Step | None:
@@ -80,8 +107,7 @@ def _by_role(walker: Walker, source: Source, cell: Cell) -> Step | None:
     net = walker.design.pins(source.instance).get(role.scan_in, -1)
     if output is None or net < 0:
         return None
-    is_first = role.clock_a is not None and role.clock_b is None
-    clock = walker.design.net_at(source.instance, role.clock_a or "") if is_first else -1
+    clocks = [walker.design.net_at(source.instance, role.clock_a)] if role.clock_a else []
     return Step(
         source.instance,
         source.pin,
@@ -91,7 +117,7 @@ def _by_role(walker: Walker, source: Source, cell: Cell) -> Step | None:
         net,
         False,
         role.bits,
-        clock,
+        tuple(clocks),
     )
 
 

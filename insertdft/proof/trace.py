@@ -7,6 +7,7 @@ through whatever passes the data on in shift mode: buffers, inverters, composed 
 from collections.abc import Sequence
 from dataclasses import dataclass, replace
 from itertools import zip_longest
+from typing import NamedTuple
 
 from insertdft.description import Chain, ChainCell, Description, LockUp
 from insertdft.design.flat import Design
@@ -41,15 +42,45 @@ def trace(design: Design, description: Description) -> Trace:
         for port in description.ports
         if port.shift is not None
     }
-    walker = Walker(design, propagate(design, held))
+    lenses: dict[tuple[str, ...], _Lens] = {}
     found: list[Chain] = []
     problems: list[Diagnostic] = []
     for chain in description.chains:
+        clocks = chain.clocks if chain.style == "lssd" else ()
+        if clocks not in lenses:
+            lenses[clocks] = _lens(design, description, held, clocks)
+        walker = lenses[clocks].walker
         walked = walk_chain(walker, chain.scan_out)
-        found.append(as_chain(walker, chain, walked))
+        found.append(as_chain(walker, chain, walked, lenses[clocks].first))
         problem = _compare(walker, chain, found[-1], walked)
         problems += [problem] if problem else []
     return Trace(tuple(found), (*problems, *_shared(found)))
+
+
+class _Lens(NamedTuple):
+    """What a chain is looked at through.
+
+    Attributes:
+        walker: Walks under the constants of shift mode; for LSSD with A on and all others at rest.
+        first: Nets that follow A, the clock of the first latch of each position.
+    """
+
+    walker: Walker
+    first: frozenset[int]
+
+
+def _lens(
+    design: Design, description: Description, held: dict[int, int], clocks: tuple[str, ...]
+) -> _Lens:
+    if not clocks:
+        return _Lens(Walker(design, propagate(design, held)), frozenset())
+    rests = {port.port: port.off for port in description.ports if port.off is not None}
+    at_rest = held | {design.port_nets[port]: off for port, off in rests.items()}
+    a_net = design.port_nets[clocks[0]]
+    on = propagate(design, at_rest | {a_net: 1 - rests.get(clocks[0], 0)})
+    off = propagate(design, at_rest)
+    first = frozenset(net for net, value in on.items() if off.get(net) != value)
+    return _Lens(Walker(design, on), first)
 
 
 @dataclass(frozen=True, slots=True)
@@ -89,8 +120,17 @@ def walk_chain(walker: Walker, scan_out: str) -> Walk:
         net = step.net
 
 
-def as_chain(walker: Walker, described: Chain, walk: Walk) -> Chain:
-    """Return a walk in the terms of a chain description, scan-in first."""
+def as_chain(
+    walker: Walker, described: Chain, walk: Walk, first: frozenset[int] = frozenset()
+) -> Chain:
+    """Return a walk in the terms of a chain description, scan-in first.
+
+    Args:
+        walker: That made the walk.
+        described: Name, ports and clocks of the chain.
+        walk: Its steps.
+        first: LSSD: nets that follow A, by which first latches are told from second ones.
+    """
     design = walker.design
     cells: list[ChainCell] = []
     lock_ups: list[LockUp] = []
@@ -98,10 +138,11 @@ def as_chain(walker: Walker, described: Chain, walk: Walk) -> Chain:
     forward = list(zip(reversed(walk.steps), list(reversed(walk.inversions))[:-1], strict=True))
     for step, wire in forward:
         turned ^= wire ^ step.entry_inverted
-        if cells and _is_second_latch(walker, described, step):
+        is_lssd = described.style == "lssd"
+        if is_lssd and cells and first.isdisjoint(step.opened_by):
             name = design.name(step.instance)
             cells[-1] = replace(cells[-1], slave=name, scan_out=step.output)
-        elif step.is_latch:
+        elif step.is_latch and not is_lssd:
             name, cell = design.name(step.instance), design.cell_name(step.instance)
             lock_ups.append(LockUp(len(cells) - 1, name, cell, _clock_port(walker, step)))
         else:
@@ -121,18 +162,6 @@ def as_chain(walker: Walker, described: Chain, walk: Walk) -> Chain:
         inverted_out=turned ^ walk.inversions[0],
         lock_ups=tuple(lock_ups),
     )
-
-
-def _is_second_latch(walker: Walker, described: Chain, step: Step) -> bool:
-    """Return whether a step of an LSSD chain is the L2 of the position before it."""
-    if described.style != "lssd":
-        return False
-    if step.is_latch:
-        return True
-    source = walker.source(step.scan_clock) if step.scan_clock >= 0 else None
-    if source is None or source.end is not End.PORT:
-        return False
-    return walker.design.input_ports[source.net] in described.clocks[1:]
 
 
 def _position(design: Design, step: Step, inverted: bool) -> ChainCell:

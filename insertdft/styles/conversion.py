@@ -4,6 +4,8 @@ from collections.abc import Iterable, Mapping
 from dataclasses import dataclass, field
 from typing import Final
 
+from insertdft.styles.gates import ComposedModule
+
 
 class TestNet:
     """Kinds of nets that test adds beside the chains; each comes from a port of its own.
@@ -92,8 +94,9 @@ class Conversion:
     Attributes:
         style: ``mux-d``, ``clocked-scan`` or ``lssd``.
         how: ``twin`` (another library cell), ``composed`` (cells around the old one), ``as-is``
-            (already a scan cell whose scan pins are free) or ``kept`` (it takes its data from the
-            element before it already, as the slave of a latch pair does).
+            (already a scan cell whose scan pins are free), ``kept`` (it takes its data from the
+            element before it already, as the slave of a latch pair does) or ``module`` (a module
+            of library gates, written once into the netlist).
         before: Cell in the input.
         after: Cell that holds the state afterwards.
         pins: Pins whose name changes, old -> new.
@@ -105,6 +108,7 @@ class Conversion:
         bits: Shift cycles through the cell; 0 for the second latch of a position.
         parts: What a composed cell adds; MISSION moves from the data pin to a part.
         area: Area added for each instance, None where the library states none.
+        module: The module of gates that ``after`` names, None for a library cell.
     """
 
     style: str
@@ -120,6 +124,7 @@ class Conversion:
     bits: int = 1
     parts: tuple[Part, ...] = ()
     area: float | None = None
+    module: ComposedModule | None = None
 
     def test_nets(self) -> tuple[str, ...]:
         """Return the test nets that every instance needs, in port order."""

@@ -7,7 +7,9 @@ whole shift-register latch. Form and rules: E. B. Eichelberger, T. W. Williams, 
 S. DasGupta, P. Goel, R. G. Walther, T. W. Williams, ITC 1982 (from memory).
 """
 
+from collections.abc import Collection
 from dataclasses import replace
+from typing import Final
 
 from insertdft.library.cell import Cell, Library, Style
 from insertdft.library.expression import Not, Var
@@ -16,22 +18,26 @@ from insertdft.styles.srl_fit import Fit, SrlKind, fit
 
 NAME = Style.LSSD.value
 
+#: Names that a composed module must not have.
+Taken = Collection[str]
+NONE: Final = frozenset[str]()
+
 KINDS = {"edge": SrlKind.EDGE, "two-phase": SrlKind.DOUBLE}
 
 
-def first_latch(library: Library, cell: Cell) -> Conversion | Refusal:
+def first_latch(library: Library, cell: Cell, taken: Taken = NONE) -> Conversion | Refusal:
     """Return how a latch gets a scan port: the L1 of a position whose L2 is there already."""
-    return _best(library, cell, SrlKind.FIRST)
+    return _best(library, cell, SrlKind.FIRST, taken)
 
 
-def single_latch(library: Library, cell: Cell) -> Conversion | Refusal:
+def single_latch(library: Library, cell: Cell, taken: Taken = NONE) -> Conversion | Refusal:
     """Return how a system latch that stands alone gets a scan port and an L2 for shifting."""
-    return _best(library, cell, SrlKind.SINGLE)
+    return _best(library, cell, SrlKind.SINGLE, taken)
 
 
-def second_latch(library: Library, cell: Cell) -> Conversion | Refusal:
+def second_latch(library: Library, cell: Cell, taken: Taken = NONE) -> Conversion | Refusal:
     """Return how a system latch becomes the L2* of a position: its scan port is under B."""
-    found = _best(library, cell, SrlKind.FIRST)
+    found = _best(library, cell, SrlKind.FIRST, taken)
     if isinstance(found, Refusal):
         return found
     pins = {
@@ -75,23 +81,24 @@ def slave_latch(cell: Cell, inverted: bool) -> Conversion | Refusal:
     )
 
 
-def flip_flop(library: Library, cell: Cell, form: str) -> Conversion | Refusal:
+def flip_flop(library: Library, cell: Cell, form: str, taken: Taken = NONE) -> Conversion | Refusal:
     """Return how a flip-flop becomes a shift-register latch.
 
     Args:
         library: What there is.
         cell: The flip-flop.
         form: ``edge`` or ``two-phase``, see ``Wishes.flip_flops``.
+        taken: Names that a composed module must not have.
     """
-    return _best(library, cell, KINDS[form])
+    return _best(library, cell, KINDS[form], taken)
 
 
 def _not(name: str) -> Not:
     return Not(Var(name))
 
 
-def _best(library: Library, cell: Cell, kind: SrlKind) -> Conversion | Refusal:
-    for found in fit(library, cell, (kind,)):
+def _best(library: Library, cell: Cell, kind: SrlKind, taken: Taken) -> Conversion | Refusal:
+    for found in fit(library, cell, (kind,), taken):
         if found.kind is SrlKind.DOUBLE and found.falling:
             return Refusal(
                 "negative-edge-in-lssd",
@@ -99,11 +106,11 @@ def _best(library: Library, cell: Cell, kind: SrlKind) -> Conversion | Refusal:
                 " C on",
                 "give these cells a clock port of their own that rests at 1, or leave them out",
             )
-        if found.module is None:
-            return _conversion(cell, found)
+        return _conversion(cell, found)
     return Refusal(
         "no-scan-cell",
-        f"the library has no level-sensitive scan cell for `{cell.name}` ({kind.value})",
+        f"the library has no level-sensitive scan cell for `{cell.name}` ({kind.value}), and none"
+        " can be composed from its NAND gates and inverters",
         "give a library that has one (signal_type test_scan_clock_a, test_scan_clock_b)",
     )
 
@@ -111,7 +118,7 @@ def _best(library: Library, cell: Cell, kind: SrlKind) -> Conversion | Refusal:
 def _conversion(cell: Cell, found: Fit) -> Conversion:
     return Conversion(
         style=NAME,
-        how="twin",
+        how="module" if found.module else "twin",
         before=cell.name,
         after=found.cell,
         pins={old: new for old, new in found.pins.items() if old != new},
@@ -121,4 +128,5 @@ def _conversion(cell: Cell, found: Fit) -> Conversion:
         taps=found.taps,
         test_pins=dict(found.test_pins),
         area=None if found.area is None or cell.area is None else found.area - cell.area,
+        module=found.module,
     )
