@@ -31,6 +31,8 @@ class Setup:
         capture: Name of the sequence between load and unload.
         clocks: Clock port of the converted netlist -> port of the original that pulses with it;
             ports of the same name need no entry.
+        skew: Time units by which a clock port is late (less than SETTLE); two are the margin that
+            the lags of the storage cells leave.
     """
 
     rounds: int = 4
@@ -38,6 +40,7 @@ class Setup:
     held: Mapping[str, int] = field(default_factory=dict)
     capture: str = "capture"
     clocks: Mapping[str, str] = field(default_factory=dict)
+    skew: Mapping[str, int] = field(default_factory=dict)
 
 
 @dataclass(frozen=True)

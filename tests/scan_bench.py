@@ -249,6 +249,11 @@ class _Run:
                 return port.off
         return 0
 
+    def _toggled(self, side: Side, port: str) -> str:
+        """Return the statement that turns a clock port over, late by its skew."""
+        skew, signal = self.setup.skew.get(port, 0), side.signal(port)
+        return f"{signal} <= #{skew} ~{signal};" if skew else f"{signal} = ~{signal};"
+
     def _task(self, side: Side, name: str, cycle: Cycle) -> str:
         """Return one tester cycle as a task; ports that the netlist lacks are left out."""
         known = set(side.inputs)
@@ -271,10 +276,7 @@ class _Run:
         for phase in () if loading else cycle.pulses:
             named = self.setup.clocks if side is self.before else {}
             ports = [port for port in (named.get(port, port) for port in phase) if port in known]
-            lines += [f"{side.signal(port)} = ~{side.signal(port)};" for port in ports]
-            lines.append(f"#{SETTLE};")
-            lines += [f"{side.signal(port)} = ~{side.signal(port)};" for port in ports]
-            lines.append(f"#{SETTLE};")
+            lines += 2 * [*(self._toggled(side, port) for port in ports), f"#{SETTLE};"]
         inner = "\n  ".join(lines)
         return f"task {name}; input [7:0] mark; begin\n  {inner}\nend endtask"
 

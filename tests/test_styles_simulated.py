@@ -239,3 +239,60 @@ def test_yosys_proves_mission_mode_with_the_shift_clocks_at_rest(
 
     assert verdict(after) is True
     assert verdict(swapped(after, "nand2_w1", "nor2_w1")) is False
+
+
+CROSSING = """
+module crossing (clk_1, clk_2, a, y);
+  input clk_1, clk_2, a;
+  output y;
+  wire q0, q1, q2, q3, d1;
+  flop_w1 r0 (.D(q3), .CK(clk_1), .Q(q0), .QN());
+  xor2_w1 g (.A(q0), .B(a), .Y(d1));
+  flop_w1 r1 (.D(d1), .CK(clk_1), .Q(q1), .QN());
+  flop_w1 r2 (.D(a), .CK(clk_2), .Q(q2), .QN());
+  flop_w1 r3 (.D(q2), .CK(clk_2), .Q(q3), .QN());
+  buf_w1 out (.A(q1), .Y(y));
+endmodule
+"""
+
+CROSSED = """
+module crossing (clk_1, clk_2, a, y, scan_enable, scan_in, scan_out);
+  input clk_1, clk_2, a, scan_enable, scan_in;
+  output y, scan_out;
+  wire q0, q1, q2, q3, d1, over;
+  scan_flop_w1 r0 (.D(q3), .SI(scan_in), .SE(scan_enable), .CK(clk_1), .Q(q0), .QN());
+  xor2_w1 g (.A(q0), .B(a), .Y(d1));
+  scan_flop_w1 r1 (.D(d1), .SI(q0), .SE(scan_enable), .CK(clk_1), .Q(q1), .QN());
+  CONNECT
+  scan_flop_w1 r2 (.D(a), .SI(over), .SE(scan_enable), .CK(clk_2), .Q(q2), .QN());
+  scan_flop_w1 r3 (.D(q2), .SI(q2), .SE(scan_enable), .CK(clk_2), .Q(q3), .QN());
+  buf_w1 out (.A(q1), .Y(y));
+  buf_w1 show (.A(q3), .Y(scan_out));
+endmodule
+"""
+
+
+def crossed(folder: Path, connect: str, skew: Mapping[str, int]) -> Outcome:
+    cells = tuple(ChainCell(f"r{n}", "scan_flop_w1", "SI", "Q") for n in range(4))
+    clocks = ("clk_1", "clk_2")
+    chain = Chain("chain", "mux-d", "scan_in", "scan_out", cells, clocks, "rise", "scan_enable")
+    sequences = make_sequences(
+        Clocking(enable=("scan_enable",), shift=(clocks,), capture=(("clk_1",), ("clk_2",)))
+    )
+    named = ports(clk_1="clock", clk_2="clock", scan_enable="scan_enable")
+    description = Description("crossing", (chain,), named, sequences)
+    texts = [CROSSING], [CROSSED.replace("CONNECT", connect)]
+    return simulate(*texts, technology("demo"), description, folder, Setup(rounds=8, skew=skew))
+
+
+@pytest.mark.parametrize("skew", [{}, {"clk_2": 8}, {"clk_1": 8}])
+def test_a_chain_across_two_clocks_stands_skew_with_a_lock_up_latch_only(
+    skew: Mapping[str, int], tmp_path: Path
+) -> None:
+    lock_up = "latch_low_w1 lock (.D(q1), .GN(clk_1), .Q(over), .QN());"
+
+    plain = crossed(tmp_path / "plain", "buf_w1 lock (.A(q1), .Y(over));", skew)
+    locked = crossed(tmp_path / "locked", lock_up, skew)
+
+    assert locked.mismatches == ()
+    assert bool(plain.mismatches) is ("clk_2" in skew)  # late at the destination: a hold violation
