@@ -25,6 +25,7 @@ def read_instances(by: ByGrammar, before: int, start: int, end: int) -> list[Row
         at = by.skip_strength_and_delay(words, at)
     elif len(words) > 2 and words[1].text == "#":
         at = by.closing(words, 2) + 1 if words[2].text == "(" else 3
+        by.parse([_X, *(words[1:at] if words[2].text == "(" else ()), *_X_WITHOUT_CONNECTIONS])
         parameters = by.code[words[1].start : words[at - 1].end]
     # A gate may do without a name, also in a row with others that have one; the grammar wants
     # all or none.
@@ -57,31 +58,18 @@ def _body(by: ByGrammar, instance: Node) -> str:
     return ",".join(pins) + ")"
 
 
-def check_parameters(by: ByGrammar, draft: Draft) -> None:
-    """Complain about parameter overrides that are none; their values are of no interest.
-
-    What looks like parameters of a gate is its delay, which is dropped.
-    """
+def drop_delays(by: ByGrammar, draft: Draft) -> None:
+    """Take out what looks like parameters of a gate: it is its delay."""
     if not draft.parameters:
         return
     cells = tuple(draft.tables.cells)
-    checked: set[tuple[bool, str]] = set()
     for instance, text in tuple(draft.parameters.items()):
-        is_gate = cells[draft.cells[instance]] in PRIMITIVES
-        if is_gate:
+        if cells[draft.cells[instance]] in PRIMITIVES:
             del draft.parameters[instance]
-        if (is_gate, text) not in checked:
-            checked.add((is_gate, text))
             start = by.code.find(text, int(draft.starts[instance]))
-            _check(by, by.words(start, start + len(text)), is_gate=is_gate)
-
-
-def _check(by: ByGrammar, words: list[Token], *, is_gate: bool) -> None:
-    if is_gate:
-        if by.skip_strength_and_delay(words, 0) < len(words):
-            by.no_verilog(words[-1].start)
-    elif words[1].text == "(":
-        by.parse([_X, *words, *_X_WITHOUT_CONNECTIONS])
+            words = by.words(start, start + len(text))
+            if by.skip_strength_and_delay(words, 0) < len(words):
+                by.no_verilog(words[-1].start)
 
 
 def _fill_empty(words: list[Token]) -> list[Token]:

@@ -3,7 +3,7 @@
 import re
 from typing import Final
 
-from insertdft.source.tokens import ATTRIBUTE, COMMENT, GAP, NAME, STRING
+from insertdft.source.tokens import ATTRIBUTE, COMMENT, GAP, NAME, REAL, SIZED, STRING
 
 
 def _without_groups(pattern: str) -> str:
@@ -13,7 +13,9 @@ def _without_groups(pattern: str) -> str:
 #: Whether the body is what it should be is checked when it is taken apart, in ``bodies.py``.
 _NAMED: Final = r"\.(?:[^;\"/\\*`\#]++|\\\S++)*+"
 _TERMS: Final = r"(?:[\w$\[\]:',\s]++|\\\S++)*+"
-_PARAMETERS: Final = rf'\((?:[^()"\\/`;]++|{STRING}|\((?:[^()"\\/`;]++|{STRING})*+\))*+\)'
+_VALUE: Final = rf"(?:{SIZED}|{REAL}|\d[\d_]*+|{STRING}|[A-Za-z_][\w$]*+)"
+_OVERRIDE: Final = rf"(?:\.\s*+{NAME}\s*+\(\s*+{_VALUE}\s*+\)|{_VALUE})\s*+"
+_PARAMETERS: Final = rf"\(\s*+(?:{_OVERRIDE}(?:,\s*+{_OVERRIDE})*+)?+\)"
 _ODD_INSTANCE: Final = rf"""
     (?P<cell>{NAME})(?:\s*+(?P<parameters>\#\s*+{_PARAMETERS}))?+(?:\s*+(?P<instance>{NAME}))?+
     \s*+\(\s*+(?:(?P<named>{_NAMED});|(?P<terms>{_TERMS})\)\s*+;)"""

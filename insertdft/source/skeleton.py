@@ -16,7 +16,7 @@ from insertdft.source.complaints import Complaints, word_at
 from insertdft.source.declarations import DIRECTIONS, NET_KINDS, Declared, declare
 from insertdft.source.draft import Draft, Row
 from insertdft.source.headers import read_header
-from insertdft.source.odd_instances import check_parameters, read_instances
+from insertdft.source.odd_instances import drop_delays, read_instances
 from insertdft.source.odd_statements import read_assigns, read_declaration
 from insertdft.source.patterns import DECLARATION, DECLARED
 from insertdft.source.preprocess import Macros, Prepared
@@ -84,6 +84,6 @@ class Skeleton:
         """Return the instances of one statement."""
         return read_instances(self._by, before, start, end)
 
-    def check_parameters(self, draft: Draft) -> None:
-        """Complain about parameter overrides that are none."""
-        check_parameters(self._by, draft)
+    def drop_delays(self, draft: Draft) -> None:
+        """Take out what looks like parameters of a gate: it is its delay."""
+        drop_delays(self._by, draft)

@@ -149,7 +149,7 @@ class _Reading:
                 raise self._outside(word)
         elif word.text == "endmodule":
             draft.close(start)
-            self._skeleton.check_parameters(draft)
+            self._skeleton.drop_delays(draft)
             self._open = None
         elif word.text != ";":
             self._skeleton.read(draft, match.start(), start, end)

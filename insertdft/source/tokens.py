@@ -20,14 +20,14 @@ ATTRIBUTE: Final = rf"\(\*{_BLANKS}{_SPECIFICATION}(?:,{_BLANKS}{_SPECIFICATION}
 #: White space, comments and attributes, as much as there is.
 GAP: Final = rf"(?:\s++|{COMMENT}|{ATTRIBUTE})*+"
 
-_SIZED = r"(?:\d[\d_]*+\s*+)?'\s*+[sS]?[bBoOdDhH]\s*+[0-9a-fA-FxXzZ?_]++"
-_REAL = r"\d[\d_]*+(?:\.\d[\d_]*+)?[eE][+-]?\d[\d_]*+|\d[\d_]*+\.\d[\d_]*+"
+SIZED: Final = r"(?:\d[\d_]*+\s*+)?'\s*+[sS]?[bBoOdDhH]\s*+[0-9a-fA-FxXzZ?_]++"
+REAL: Final = r"\d[\d_]*+(?:\.\d[\d_]*+)?[eE][+-]?\d[\d_]*+|\d[\d_]*+\.\d[\d_]*+"
 _OPERATOR = (
     r"<<<|>>>|===|!==|\|\||&&|~\||~&|~\^|\^~|<<|>>|==|!=|<=|>=|\*\*|\+:|-:"
     r"|[][(){},;:.#@?=+\-*/%&|^~!<>$]"
 )
 TOKEN: Final = re.compile(
-    rf"(?P<gap>\s++|{COMMENT}|{ATTRIBUTE})|(?P<name>{NAME})|(?P<sized>{_SIZED})|(?P<real>{_REAL})"
+    rf"(?P<gap>\s++|{COMMENT}|{ATTRIBUTE})|(?P<name>{NAME})|(?P<sized>{SIZED})|(?P<real>{REAL})"
     rf"|(?P<number>\d[\d_]*+)|(?P<string>{STRING})|(?P<macro>`{NAME})|(?P<operator>{_OPERATOR})",
     re.ASCII,
 )
