@@ -13,7 +13,7 @@ from insertdft.description import Chain, Description
 from insertdft.design.flat import Design
 from insertdft.exports.frames import FREE, SCAN, Frame, Program, leading_scans
 from insertdft.simulate.state import Machine
-from insertdft.simulate.words import Rails, Words, pack, unpack
+from insertdft.simulate.words import Words, pack, unpack
 
 
 @dataclass(frozen=True, slots=True)
@@ -54,89 +54,95 @@ def parity(chain: Chain) -> int:
 def random_patterns(
     design: Design, description: Description, program: Program, count: int, seed: int = 1
 ) -> tuple[Pattern, ...]:
-    """Return ``count`` random patterns of each capture sequence, with expected values."""
-    found: list[Pattern] = []
-    for number, name in enumerate(program.captures):
-        generator = np.random.default_rng([seed, number])
-        found += _Batch(design, description, program, name, generator, count).run()
-    return tuple(found)
+    """Return ``count`` random patterns of each capture sequence, with expected values.
+
+    Values that follow from cells whose behaviour the simulator does not know are ``X``.
+    """
+    if not program.captures or count < 1:
+        return ()
+    return _Batch(design, description, program, count, seed).run()
 
 
 class _Batch:
-    """Patterns of one sequence, simulated side by side."""
+    """Patterns of all sequences side by side; each run of the machine is a *lane*."""
 
     def __init__(
-        self,
-        design: Design,
-        description: Description,
-        program: Program,
-        name: str,
-        generator: np.random.Generator,
-        count: int,
+        self, design: Design, description: Description, program: Program, count: int, seed: int
     ) -> None:
-        self.chains, self.program, self.name = description.chains, program, name
-        self.frames = program.captures[name]
-        self.extra = leading_scans(self.frames)
-        self.count = count
-        toss = generator.integers
+        self.chains, self.program = description.chains, program
+        self.names = [name for name in program.captures for _ in range(count)]
+        self.lanes = len(self.names)
+        self.extra = {name: leading_scans(frames) for name, frames in program.captures.items()}
+        toss = np.random.default_rng(seed).integers
+        more = max(self.extra.values())
         self.loads = [
-            toss(0, 2, (chain.length + self.extra, count), dtype=np.uint8).astype(np.bool_)
+            toss(0, 2, (chain.length + more, self.lanes), dtype=np.uint8).astype(np.bool_)
             for chain in self.chains
         ]
-        self.inputs = toss(0, 2, (len(program.free), count), dtype=np.uint8).astype(np.bool_)
-        self.machine = Machine(design, words=max(1, -(-count // 64)))
+        self.inputs = toss(0, 2, (len(program.free), self.lanes), dtype=np.uint8).astype(np.bool_)
+        self.free = {port: pack(row) for port, row in zip(program.free, self.inputs, strict=True)}
+        self.masks = {
+            name: pack(np.array([mine == name for mine in self.names])) for name in program.captures
+        }
+        self.everywhere = pack(np.ones(self.lanes, np.bool_))
+        self.machine = Machine(design, words=len(self.everywhere))
         self.at = 0
 
-    def run(self) -> list[Pattern]:
+    def run(self) -> tuple[Pattern, ...]:
         """Return the patterns with what the simulator expects."""
         for frame in self.program.setup:
-            self._frame(frame)
-        self._load()
-        measured = [
-            self._rows(seen) for frame in self.frames if (seen := self._frame(frame)) is not None
-        ]
-        ends = self._unload()
-        return [self._pattern(number, measured, ends) for number in range(self.count)]
+            self._all(frame)
+        self._shift()
+        measured: list[list[str]] = [[] for _ in self.names]
+        for step in range(max(map(len, self.program.captures.values()))):
+            self._step(step, measured)
+        ends = self._shift()
+        return tuple(self._pattern(lane, measured[lane], ends) for lane in range(self.lanes))
 
-    def _load(self) -> None:
+    def _shift(self) -> list[list[str]]:
+        """Shift a whole load; return what each scan-out shows, shift by shift."""
         for frame in self.program.before_shift:
-            self._frame(frame)
-        for _ in range(self.program.length):
-            for frame in self.program.shift:
-                self._frame(frame)
-
-    def _unload(self) -> list[list[str]]:
-        for frame in self.program.before_shift:
-            self._frame(frame)
+            self._all(frame)
         seen: list[list[str]] = []
         for _ in range(self.program.length):
             for frame in self.program.shift:
-                self._force(frame)
+                self.machine.force(self._values(frame))
                 if frame.scan:
-                    ports = [self.machine.port(chain.scan_out) for chain in self.chains]
-                    seen.append(self._rows(ports))
-                self._pulse(frame)
+                    seen.append([self._letters(chain.scan_out) for chain in self.chains])
+                self._pulse([(frame, self.everywhere)])
         return seen
 
-    def _frame(self, frame: Frame) -> list[Rails] | None:
-        self._force(frame)
-        ports = self.program.outputs
-        seen = [tuple(map(np.copy, self.machine.port(name))) for name in ports]
-        self._pulse(frame)
-        return seen if frame.measure else None
+    def _all(self, frame: Frame) -> None:
+        self.machine.force(self._values(frame))
+        self._pulse([(frame, self.everywhere)])
 
-    def _force(self, frame: Frame) -> None:
-        free = dict(zip(self.program.free, self.inputs, strict=True))
-        scan = self._scan_bits() if frame.scan else {}
-        values: dict[str, Words | int] = {}
-        for port, level in frame.levels.items():
-            if level == FREE:
-                values[port] = pack(free[port])
-            elif level == SCAN:
-                values[port] = scan[port]
-            else:
-                values[port] = int(level)
+    def _step(self, step: int, measured: list[list[str]]) -> None:
+        """Run frame ``step`` of every sequence that has one, each in its lanes."""
+        running = [
+            (frames[min(step, len(frames) - 1)], self.masks[name], step < len(frames))
+            for name, frames in self.program.captures.items()
+        ]
+        values: dict[str, Words | int] = dict.fromkeys(self.program.inputs, 0)
+        scanned = self.at
+        for frame, mask, _ in running:
+            self.at = scanned
+            for port, word in self._values(frame).items():
+                words = word if not isinstance(word, int) else self.everywhere * np.uint64(word)
+                values[port] = values[port] | (words & mask)
         self.machine.force(values)
+        outputs = [self._letters(port) for port in self.program.outputs]
+        for lane, name in enumerate(self.names):
+            frames = self.program.captures[name]
+            if step < len(frames) and frames[step].measure:
+                measured[lane].append("".join(row[lane] for row in outputs))
+        self._pulse([(frame, mask) for frame, mask, active in running if active])
+
+    def _values(self, frame: Frame) -> dict[str, Words | int]:
+        scan = self._scan_bits() if frame.scan else {}
+        return {
+            port: self.free[port] if level == FREE else scan[port] if level == SCAN else int(level)
+            for port, level in frame.levels.items()
+        }
 
     def _scan_bits(self) -> Mapping[str, Words | int]:
         found: dict[str, Words | int] = {}
@@ -146,29 +152,39 @@ class _Batch:
         self.at += 1
         return found
 
-    def _pulse(self, frame: Frame) -> None:
-        for phase in frame.pulses:
-            self.machine.pulse({port: self.program.off[port] for port in phase})
+    def _pulse(self, frames: Sequence[tuple[Frame, Words]]) -> None:
+        """Pulse phase after phase, every frame in its own lanes."""
+        for phase in range(max((len(frame.pulses) for frame, _ in frames), default=0)):
+            on: dict[str, Words] = {}
+            for frame, mask in frames:
+                for port in frame.pulses[phase] if phase < len(frame.pulses) else ():
+                    on[port] = on.get(port, np.zeros_like(mask)) | mask
+            off = self.program.off
+            self.machine.force({port: ~word if off[port] else word for port, word in on.items()})
+            self.machine.force({port: off[port] for port in on})
 
-    def _rows(self, ports: Sequence[Rails]) -> list[str]:
-        """Return the values of each port over all patterns."""
-        return ["".join(_letters(rails, self.count)) for rails in ports]
+    def _letters(self, port: str) -> str:
+        """Return the values of a port over all lanes."""
+        one, zero = (unpack(rail, self.lanes) for rail in self.machine.port(port))
+        return "".join(
+            "H" if high else "L" if low else "X" for high, low in zip(one, zero, strict=True)
+        )
 
     def _pattern(
-        self, number: int, measured: Sequence[Sequence[str]], ends: Sequence[Sequence[str]]
+        self, lane: int, measured: Sequence[str], ends: Sequence[Sequence[str]]
     ) -> Pattern:
+        name = self.names[lane]
+        loads = (
+            load[: chain.length + self.extra[name], lane]
+            for chain, load in zip(self.chains, self.loads, strict=True)
+        )
         return Pattern(
-            self.name,
-            tuple("".join("01"[int(bit)] for bit in load[:, number]) for load in self.loads),
-            "".join("01"[int(bit)] for bit in self.inputs[:, number]),
-            tuple("".join(row[number] for row in rows) for rows in measured),
+            name,
+            tuple("".join("01"[int(bit)] for bit in load) for load in loads),
+            "".join("01"[int(bit)] for bit in self.inputs[:, lane]),
+            tuple(measured),
             tuple(
-                "".join(rows[index][number] for rows in ends[: chain.length])
+                "".join(rows[index][lane] for rows in ends[: chain.length])
                 for index, chain in enumerate(self.chains)
             ),
         )
-
-
-def _letters(rails: Rails, count: int) -> list[str]:
-    one, zero = (unpack(rail, count) for rail in rails)
-    return ["H" if high else "L" if low else "X" for high, low in zip(one, zero, strict=True)]

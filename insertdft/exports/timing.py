@@ -6,6 +6,7 @@ The phases of a cycle never overlap; that is what level-sensitive scan rests on.
 """
 
 from dataclasses import dataclass
+from itertools import pairwise
 from typing import Final
 
 from insertdft.description import Description
@@ -40,7 +41,7 @@ class Timing:
             DesignError: Two events overlap or leave the cycle.
         """
         edges = [self.force, self.strobe, *(edge for phase in self.phases for edge in phase)]
-        ordered = all(one < two for one, two in zip(edges, edges[1:], strict=False))
+        ordered = all(one < two for one, two in pairwise(edges))
         if self.force < 0 or not ordered or edges[-1] >= self.period:
             raise DesignError(
                 [
