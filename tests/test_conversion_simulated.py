@@ -97,9 +97,22 @@ def test_the_demo_chip_shifts_and_captures_like_the_original(
     assert outcome.others > 0
 
 
-@pytest.mark.parametrize("capture", ["capture", "launch_on_capture", "launch_on_shift"])
-def test_a_processor_of_latch_pairs_in_level_sensitive_scan(capture: str, tmp_path: Path) -> None:
-    tech = technology("demo")
+@pytest.mark.parametrize(
+    ("kit", "capture"),
+    [
+        ("demo", "capture"),
+        ("demo", "launch_on_capture"),
+        ("demo", "launch_on_shift"),
+        ("osu035", "capture"),
+        ("osu035", "launch_on_capture"),
+        ("ihp", "capture"),
+        ("sky130", "launch_on_shift"),
+    ],
+)
+def test_a_processor_of_latch_pairs_in_level_sensitive_scan(
+    kit: str, capture: str, tmp_path: Path
+) -> None:
+    tech = technology(kit)
     done = convert(core_netlist("serv", tech, latches=True), tech, 4, "lssd")
 
     outcome = done.simulated(tech, tmp_path, Setup(capture=capture))
