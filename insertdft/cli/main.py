@@ -24,6 +24,7 @@ COMMANDS: Final[dict[str, str]] = {
     "convert": "Turn a netlist into one that can be tested by scan.",
     "survey": "Show the storage, clocks and resets of a netlist, and what keeps cells out.",
     "trace": "Walk the scan chains of any netlist and compare them with a description.",
+    "export": "Write chains for pattern tools, layout, timing and simulation.",
     "waves": "Draw the clock sequences of a chain description.",
     "demo": "Run the main job on a chip and a library that come with the tool.",
 }

@@ -73,7 +73,8 @@ class _Writer:
         """Return the port connections, whole ports in declared order."""
         found = []
         for port, bits in groupby(self.ports, lambda bit: bit.port):
-            wires = [wire for bit in bits if (wire := self._wire(bit))]
+            # The netlist has the rightmost bit of a port first, a concatenation the leftmost.
+            wires = [wire for bit in bits if (wire := self._wire(bit))][::-1]
             joined = f"{{{', '.join(wires)}}}" if len(wires) > 1 else "".join(wires)
             found.append(f".{to_verilog(port)}({joined})")
         return found

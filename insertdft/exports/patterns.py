@@ -122,12 +122,12 @@ class _Batch:
             (frames[min(step, len(frames) - 1)], self.masks[name], step < len(frames))
             for name, frames in self.program.captures.items()
         ]
-        values: dict[str, Words | int] = dict.fromkeys(self.program.inputs, 0)
+        values = {port: np.zeros_like(self.everywhere) for port in self.program.inputs}
         scanned = self.at
         for frame, mask, _ in running:
             self.at = scanned
             for port, word in self._values(frame).items():
-                words = word if not isinstance(word, int) else self.everywhere * np.uint64(word)
+                words = (mask if word else np.zeros_like(mask)) if isinstance(word, int) else word
                 values[port] = values[port] | (words & mask)
         self.machine.force(values)
         outputs = [self._letters(port) for port in self.program.outputs]
