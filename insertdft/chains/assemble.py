@@ -25,6 +25,7 @@ from insertdft.design.flat import Design
 from insertdft.library import find_buffers
 from insertdft.netlist import OPEN, Instance, Module
 from insertdft.styles import Conversion, TestNet, in_port_order, kind_of
+from insertdft.styles.lssd import EDGE_CLOCK_B
 from insertdft.styles.sequences import Clocking, make_sequences
 from insertdft.survey import Survey
 
@@ -135,25 +136,31 @@ def _clocking(
     enable = port_names.get(TestNet.SCAN_ENABLE)
     opens_l2 = _opens_l2(chosen, port_names)
     phases = [tuple(dict.fromkeys(ports)) for ports in by_phase[: 1 if opens_l2 else None]]
-    settle = (opens_l2,) if opens_l2 else ()
+    whole = port_names.get(EDGE_CLOCK_B)
+    settle = tuple(port for port in opens_l2 if port != whole)
     return Clocking(
         held={item.port: item.value for item in (*survey.held, *survey.set_resets)},
         enable=() if enable is None else (enable,),
-        shift=(*phases, *settle),
+        shift=(*phases, opens_l2) if opens_l2 else tuple(phases),
         capture=tuple((clock,) for clock in _system_clocks(survey, chosen)),
-        settle=settle,
+        settle=(settle,) if settle else (),
     )
 
 
 def _opens_l2(chosen: Chosen, port_names: Mapping[str, str]) -> tuple[str, ...]:
     """Return the ports that open the second latches of LSSD positions, if there are any."""
-    new = port_names.get(TestNet.CLOCK_B)
-    return (*(() if new is None else (new,)), *chosen.lssd.shift_b)
+    new = [port for net, port in port_names.items() if kind_of(net) == TestNet.CLOCK_B]
+    return (*new, *chosen.lssd.shift_b)
 
 
 def _system_clocks(survey: Survey, chosen: Chosen) -> dict[str, int]:
     """Return the clock ports that capture with their values at rest, in the order they pulse."""
-    ports = {at.domain.port: 0 for at in chosen.groups if at.domain is not None}
+    edges: dict[str, set[str]] = {}
+    for at in chosen.groups:
+        if at.domain is not None:
+            edges.setdefault(at.domain.port, set()).add(at.domain.edge)
+    # A clock whose cells all take data at its falling edge rests at 1, as such a cell wants it.
+    ports = {port: int(found == {"fall"}) for port, found in edges.items()}
     ports |= chosen.lssd.capture
     domain = dict(zip(survey.storage.tolist(), survey.domain.tolist(), strict=True))
     for leaf in chosen.lssd.conversion:

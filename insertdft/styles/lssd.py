@@ -22,6 +22,9 @@ NAME = Style.LSSD.value
 Taken = Collection[str]
 NONE: Final = frozenset[str]()
 
+#: B of cells that their system clock's edge loads whole.
+EDGE_CLOCK_B: Final = f"{TestNet.CLOCK_B}/2"
+
 KINDS = {"edge": SrlKind.EDGE, "two-phase": SrlKind.DOUBLE}
 
 
@@ -90,7 +93,15 @@ def flip_flop(library: Library, cell: Cell, form: str, taken: Taken = NONE) -> C
         form: ``edge`` or ``two-phase``, see ``Wishes.flip_flops``.
         taken: Names that a composed module must not have.
     """
-    return _best(library, cell, KINDS[form], taken)
+    found = _best(library, cell, KINDS[form], taken)
+    if form != "edge" or isinstance(found, Refusal):
+        return found
+    # The edge loads the cell whole; a B after it would bring back what L1 held before. So these
+    # cells get a B of their own, which pulses while shifting and at no other time.
+    pins = {
+        pin: EDGE_CLOCK_B if net == TestNet.CLOCK_B else net for pin, net in found.test_pins.items()
+    }
+    return replace(found, test_pins=pins)
 
 
 def _not(name: str) -> Not:

