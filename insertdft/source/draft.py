@@ -6,7 +6,6 @@ over; where something is, the statements are read again one by one by the gramma
 """
 
 import re
-from array import array
 from collections import defaultdict
 from collections.abc import Sequence
 from itertools import count, islice
@@ -14,7 +13,7 @@ from typing import Final, NamedTuple, Protocol
 
 import numpy as np
 
-from insertdft.netlist import Header, Ids
+from insertdft.netlist import Header, Ids, Offsets
 from insertdft.netlist.names import KEYWORDS, canonical
 from insertdft.source.bodies import NOTHING, PinTable, take_apart
 from insertdft.source.nets import Nets, kept
@@ -77,13 +76,12 @@ class _Columns(NamedTuple):
     names: Sequence[str]
     bodies: Sequence[str]
     parameters: Sequence[str | None]
-    before: Sequence[int]
-    start: Sequence[int]
-    end: Sequence[int]
+    offsets: Offsets  # shape (3, n): before, start, end
 
 
 def _columns(rows: Sequence[Row]) -> _Columns:
-    return _Columns(*zip(*rows, strict=True))
+    cells, names, bodies, parameters, *offsets = zip(*rows, strict=True)
+    return _Columns(cells, names, bodies, parameters, np.array(offsets, np.int64))
 
 
 class ReadsOneByOne(Protocol):
@@ -148,7 +146,7 @@ class Draft:
         self.row_start = np.zeros(1, np.int64)
         self._by_grammar = by_grammar
         self._assign_texts: list[tuple[str, str, int]] = []
-        self._offsets = (array("q"), array("q"), array("q"))
+        self._offsets: list[Offsets] = []
         self._cells: list[Ids] = []
         self._pins: list[Ids] = []
         self._numbers: list[Ids] = []
@@ -162,10 +160,8 @@ class Draft:
         """Finish reading: ``endmodule`` stands at ``end``."""
         self.body_end = end
         self.is_closed = True
-        self.before, self.starts, self.ends = (
-            np.frombuffer(column, np.int64) if column else np.zeros(0, np.int64)
-            for column in self._offsets
-        )
+        empty = np.zeros((3, 0), np.int64)
+        self.before, self.starts, self.ends = np.concatenate([empty, *self._offsets], axis=1)
         self.cells, self.pins = _joined(self._cells), _joined(self._pins)
         self.numbers = _joined(self._numbers)
         counts = _joined(self._counts)
@@ -198,8 +194,10 @@ class Draft:
         cells, names, bodies = zip(*[match.group(1, 2, 3) for match in matches], strict=True)
         starts = [match.start(1) for match in matches]
         ends = [match.end() for match in matches]
-        before = [matches[0].start(), *ends[:-1]]
-        columns = _Columns(cells, names, bodies, (), before, starts, ends)
+        offsets = np.empty((3, len(matches)), np.int64)
+        offsets[1], offsets[2] = starts, ends
+        offsets[0, 0], offsets[0, 1:] = matches[0].start(), offsets[2, :-1]
+        columns = _Columns(cells, names, bodies, (), offsets)
         if not self._add(columns):
             self.add_mixed(matches)
 
@@ -235,8 +233,7 @@ class Draft:
         self._counts.append(found.counts)
         self._cells.append(_ids(self.tables.cells, columns.cells))
         self._add_names(columns.names, columns.parameters)
-        for column, values in zip(self._offsets, columns[4:], strict=True):
-            column.extend(values)
+        self._offsets.append(columns.offsets)
         return True
 
     def _add_names(self, names: Sequence[str], parameters: Sequence[str | None]) -> None:

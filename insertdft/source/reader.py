@@ -14,7 +14,8 @@ from insertdft.diagnostics import Diagnostic, Severity, error
 from insertdft.netlist import Module, Netlist
 from insertdft.source.complaints import Complaints, word_at
 from insertdft.source.draft import Draft, Tables
-from insertdft.source.link import link_module, prepare_linking
+from insertdft.source.link import link_module
+from insertdft.source.ports import prepare_linking
 from insertdft.source.preprocess import Macros, prepare
 from insertdft.source.resolve import Resolved, check_names, resolve
 from insertdft.source.statements import read_modules

@@ -104,8 +104,9 @@ def check_names(draft: Draft, complaints: Complaints) -> None:
                     _instance_span(draft, instance),
                     "rename one of them",
                 )
-    if any(map(nets.number.__contains__, draft.names)):
-        both = [name for name in draft.names if name and nets.is_declared(name)]
+    both = list(filter(nets.number.__contains__, draft.names))
+    if both:
+        both = [name for name in both if name and nets.is_declared(name)]
         if both:
             complaints.add(_called_alike(draft, both))
 

@@ -212,7 +212,7 @@ class _Block:
             if self._wanted.in_lines:
                 return f"\\u_core.alu.add_{number}[{number % 8}] "
             return f"\\u_core/alu/U{number} "
-        return f"_{number + 100000:05d}_" if self._wanted.in_lines else f"U{number + 1}"
+        return f"_{number + len(self._wires):05d}_" if self._wanted.in_lines else f"U{number + 1}"
 
     def _flip_flop(self, number: int) -> str:
         has_reset = self._chance.random() < RESET_SHARE
