@@ -4,8 +4,7 @@ The text itself is never rewritten. Directives and branches that are not taken b
 copy of the same length, so an offset means the same place in both; uses of macros stay and are
 replaced when tokens are made. A text without a grave accent is its own copy.
 
-Source: IEEE 1364-2005, clause 19; ```delay_mode_path`` and the like are from memory of common
-simulators and have no meaning for a netlist.
+Source: IEEE 1364-2005, clause 19; ```delay_mode_path`` and the like are from memory.
 """
 
 import re

@@ -1,5 +1,7 @@
 """Every mistake in a netlist ends in a message with its place, cause and what to do."""
 
+import re
+
 import pytest
 from source.cases import read
 
@@ -253,3 +255,33 @@ def test_the_first_file_of_a_module_is_named_when_it_comes_twice() -> None:
 def test_nothing_at_all_is_refused() -> None:
     with pytest.raises(DesignError):
         read_netlist([])
+
+
+#: Statements broken off or turned round; none of them may be read, or end in anything else.
+MANGLED = """
+nor #(1], 2) g (a, a, a) ;|nor #(1, 2 g (a, a, a) ;|nor #(1, 2) 3 g (a, a, a) ;|nor # g ;|nor ;
+nor (strong0 ;|nor #(1 g ;|and # ;|wire ;|wire [ ;|wire # ;|wire (small) ;|wire wire n ;
+wire inout io ;|wire [1:0 n ;|wire n[ ;|assign ;|assign # ;|assign (strong0 a ;|assign y ;
+X # u () ;|X #u ;|X ;|X u ;|X u ) ;|X u ( ;|X u (.A) ;|X u (.A( ) ;|X u (.A({a a})) ;
+X u (.A(x(,.B(q),.C(z ), .Y(n1)) ;|X #(.(1)) u () ;|X #(.P(1')) u () ;|parameter ;|parameter A ;
+3 ;|. ;|( ;|X u (.A({})) ;|X u (.A({2{}})) ;|X u (.A({a,})) ;|X u (.A(y[])) ;|X u (.A(y[1:])) ;
+X u (.A(1'b)) ;|X u (.A(y[a])) ;|(* = 1 *) X u () ;|(* a (* b *) X u () ;
+"""
+
+
+@pytest.mark.parametrize("statement", [item for item in re.split(r"[|\n]", MANGLED) if item])
+def test_mangled_statement_is_refused_at_a_place(statement: str) -> None:
+    for item in problems(f"{BODY}{statement}\nendmodule\n"):
+        assert item.span is not None
+        assert item.span.place.startswith("in.v:")
+
+
+@pytest.mark.parametrize(
+    "header",
+    """module ;|module|module 3 ();|module m (a;|module m (,);|module m (a,);|module m (,a);
+    |module m #(parameter A=1;|module m #;|module m #(3) ();|module m (input);
+    |module m (input a b);|module m (input [3:0);|module m (input input a);|module m (a b);
+    |module m (wire a);|module m (input a = 1);""".replace("\n    ", "").split("|"),
+)
+def test_mangled_header_is_refused(header: str) -> None:
+    assert problems(f"{header}\nendmodule\n")
