@@ -62,8 +62,8 @@ def test_wrong_wishes_are_refused(inputs: list[str], tmp_path: Path) -> None:
     assert unknown.exit_code == 2
     assert "stil" in unknown.output
 
+    words = [*inputs, "--to", "stil", "--period", "1", *out]
     with pytest.raises(DesignError, match="no room"):
-        words = [*inputs, "--to", "stil", "--period", "1", *out]
         CliRunner().invoke(command, words, catch_exceptions=False)
 
 
@@ -71,8 +71,8 @@ def test_another_netlist_is_refused(inputs: list[str], tmp_path: Path) -> None:
     other = tmp_path / "other.v"
     other.write_text("module top (clk); input clk; endmodule\n", "latin-1")
 
+    words = [inputs[0], str(other), *inputs[2:], "--to", "stil", "--out", str(tmp_path)]
     with pytest.raises(DesignError) as caught:
-        words = [inputs[0], str(other), *inputs[2:], "--to", "stil", "--out", str(tmp_path)]
         CliRunner().invoke(command, words, catch_exceptions=False)
     assert caught.value.diagnostics[0].slug == "export-mismatch"
     assert not (tmp_path / "scan.stil").exists()

@@ -7,9 +7,9 @@ from designs import convert, written
 from icarus import run_icarus
 from technologies import technology
 
+from insertdft.description import Description
 from insertdft.design.flat import Design
 from insertdft.design.link import link
-from insertdft.description import Description
 from insertdft.exports.frames import make_program
 from insertdft.exports.inputs import ExportInput
 from insertdft.exports.patterns import random_patterns

@@ -2,6 +2,7 @@
 
 import shutil
 import subprocess
+from itertools import pairwise
 from pathlib import Path
 
 import pytest
@@ -86,7 +87,7 @@ def test_lssd_clocks_do_not_overlap_in_any_mode(tmp_path: Path) -> None:
             for line in lines
             if line.startswith("clock ")
         )
-        for one, two in zip(edges, edges[1:], strict=False):
+        for one, two in pairwise(edges):
             assert one[1] < two[0] or one[:2] == two[:2], (one, two)
         idle = {line.split()[1] for line in lines if line.startswith("case ")}
         assert not idle & {edge[2] for edge in edges}
