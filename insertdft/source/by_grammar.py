@@ -93,15 +93,15 @@ class ByGrammar:
             at = closing + 1
         if at < len(words) - 1 and words[at].text == "#":
             if words[at + 1].text != "(":
-                self._check_delay([words[at + 1]], words[at + 1])
+                self.check_delay([words[at + 1]], words[at + 1])
                 return at + 2
             closing = self.closing(words, at + 1)
             for part in split_commas(words[at + 2 : closing]):
-                self._check_delay(part, words[closing])
+                self.check_delay(part, words[closing])
             at = closing + 1
         return at
 
-    def _check_delay(self, words: list[Token], end: Token) -> None:
+    def check_delay(self, words: list[Token], end: Token) -> None:
         """Complain unless the words are one value, or three with colons between."""
         values = split_at(words, ":")
         if len(values) not in (1, 3):

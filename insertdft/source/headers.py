@@ -113,6 +113,9 @@ class _Ports:
             # A name alone is declared like the port before it (IEEE 1364-2005, 12.3.4).
             prefix, name = self._declared[-1][0], part
         else:
+            # More than a name is for the grammar to refuse, but for a kind of net in front.
+            if len(part) > 1:
+                self._by.no_verilog(part[1].start)
             return part
         self._declared.append((prefix, name))
         return name[:1]

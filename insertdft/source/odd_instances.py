@@ -24,8 +24,12 @@ def read_instances(by: ByGrammar, before: int, start: int, end: int) -> list[Row
     if is_gate:
         at = by.skip_strength_and_delay(words, at)
     elif len(words) > 2 and words[1].text == "#":
-        at = by.closing(words, 2) + 1 if words[2].text == "(" else 3
-        by.parse([_X, *(words[1:at] if words[2].text == "(" else ()), *_X_WITHOUT_CONNECTIONS])
+        if words[2].text == "(":
+            at = by.closing(words, 2) + 1
+            by.parse([_X, *words[1:at], *_X_WITHOUT_CONNECTIONS])
+        else:
+            at = 3
+            by.check_delay([words[2]], words[2])
         parameters = by.code[words[1].start : words[at - 1].end]
     # A gate may do without a name, also in a row with others that have one; the grammar wants
     # all or none.

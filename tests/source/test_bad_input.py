@@ -263,7 +263,7 @@ nor #(1], 2) g (a, a, a) ;|nor #(1, 2 g (a, a, a) ;|nor #(1, 2) 3 g (a, a, a) ;|
 nor (strong0 ;|nor #(1 g ;|and # ;|wire ;|wire [ ;|wire # ;|wire (small) ;|wire wire n ;
 wire inout io ;|wire [1:0 n ;|wire n[ ;|assign ;|assign # ;|assign (strong0 a ;|assign y ;
 X # u () ;|X #u ;|X ;|X u ;|X u ) ;|X u ( ;|X u (.A) ;|X u (.A( ) ;|X u (.A({a a})) ;
-X u (.A(x(,.B(q),.C(z ), .Y(n1)) ;|X #(.(1)) u () ;|X #(.P(1')) u () ;|parameter ;|parameter A ;
+X u (.A(x(,.B(q),.C(z ), .Y(n1)) ;|X #(.(1)) u () ;|X #) u () ;|X #(.P(1')) u () ;|parameter ;|parameter A ;
 3 ;|. ;|( ;|X u (.A({})) ;|X u (.A({2{}})) ;|X u (.A({a,})) ;|X u (.A(y[])) ;|X u (.A(y[1:])) ;
 X u (.A(1'b)) ;|X u (.A(y[a])) ;|(* = 1 *) X u () ;|(* a (* b *) X u () ;
 """
@@ -281,7 +281,9 @@ def test_mangled_statement_is_refused_at_a_place(statement: str) -> None:
     """module ;|module|module 3 ();|module m (a;|module m (,);|module m (a,);|module m (,a);
     |module m #(parameter A=1;|module m #;|module m #(3) ();|module m (input);
     |module m (input a b);|module m (input [3:0);|module m (input input a);|module m (a b);
-    |module m (wire a);|module m (input a = 1);""".replace("\n    ", "").split("|"),
+    |module m (wire a);|module m (wire input a);|module m (input a = 1);""".replace(
+        "\n    ", ""
+    ).split("|"),
 )
 def test_mangled_header_is_refused(header: str) -> None:
     assert problems(f"{header}\nendmodule\n")
