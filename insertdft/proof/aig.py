@@ -68,8 +68,33 @@ class Aig:
         result = np.where((low == FALSE) | (low ^ 1 == high), FALSE, high).astype(np.int32)
         rest = np.flatnonzero((low > TRUE) & (low >> 1 != high >> 1))
         if len(rest):
-            result[rest] = self._hashed(low[rest], high[rest]) << 1
+            result[rest] = self._looked_into(low[rest], high[rest])
         return result
+
+    def _looked_into(self, low: Lits, high: Lits) -> Lits:
+        """Return the AND of different nodes, the operands of each being looked at.
+
+        With x and y = p q: x y is y if x is p, and false if x is p inverted. With y = (p q)
+        inverted: x y is x if x is p inverted, and x and not q if x is p.
+        """
+        found = np.full(len(low), -1, np.int32)
+        for x, y in ((low, high), (high, low)):
+            p, q = self._left[y >> 1], self._right[y >> 1]
+            same, opposite = (p == x) | (q == x), (p == x ^ 1) | (q == x ^ 1)
+            turned = (y & 1) == 1
+            known = found >= 0
+            found = np.where(~known & same & ~turned, y, found)
+            found = np.where(~known & opposite & ~turned, FALSE, found)
+            found = np.where(~known & opposite & turned, x, found)
+            shorter = np.flatnonzero((found < 0) & same & turned)
+            if len(shorter):
+                other = np.where(p == x, q, p)[shorter] ^ 1
+                found[shorter] = self.conj(x[shorter], other)
+        left = np.flatnonzero(found < 0)
+        if len(left):
+            found[left] = self._hashed(low[left], high[left]) << 1
+        answer: Lits = found.astype(np.int32)
+        return answer
 
     def disj(self, one: Lits, other: Lits) -> Lits:
         """Return ``one OR other``."""
@@ -87,13 +112,7 @@ class Aig:
     def choose(self, select: Lits, when1: Lits, when0: Lits) -> Lits:
         """Return ``select ? when1 : when0``."""
         chosen = self.disj(self.conj(select, when1), self.conj(select ^ 1, when0))
-        return np.where(when1 == when0, when1, chosen).astype(np.int32)
-
-    def one_of(self, lits: Lits) -> Lits:
-        """Return the OR over the first axis."""
-        found = lits[0]
-        for row in lits[1:]:
-            found = self.disj(found, row)
+        found: Lits = np.where(when1 == when0, when1, chosen).astype(np.int32)
         return found
 
     def _hashed(self, low: Lits, high: Lits) -> Lits:

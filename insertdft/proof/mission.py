@@ -167,7 +167,7 @@ def _ports(joint: Joint, values: tuple[Lits, Lits]) -> list[Block]:
     def name(row: int) -> str:
         return names[row]
 
-    return [Block("output", *lits, None, name, _says("output `{}` differs", name))]
+    return [Block("output", lits[0], lits[1], None, name, _says("output `{}` differs", name))]
 
 
 def _buses(joint: Joint, values: tuple[Lits, Lits]) -> list[Block]:
@@ -194,7 +194,7 @@ def _buses(joint: Joint, values: tuple[Lits, Lits]) -> list[Block]:
             at(values[side], getattr(part.circuit.buses, level)[where[:, side]])
             for side, part in enumerate((joint.before, joint.after))
         ]
-        blocks.append(Block("bus", *lits, None, name, fact))
+        blocks.append(Block("bus", lits[0], lits[1], None, name, fact))
     return blocks
 
 
@@ -216,7 +216,7 @@ def _boxes(joint: Joint, values: tuple[Lits, Lits]) -> Block:
         return names[row]
 
     fact = _says("black-box pin `{}` gets another value", name)
-    return Block("black-box pin", *lits, None, name, fact)
+    return Block("black-box pin", lits[0], lits[1], None, name, fact)
 
 
 def _unclear(joint: Joint, kinds: list[Numbers], odd: Numbers) -> list[str]:

@@ -41,7 +41,27 @@ def reduced(table: StateTable, node: str, known: Known) -> Storage | None:
         tuple(table.nodes[place] for place in nodes),
         tuple(found),
     )
-    return next((item for item in table_storages(small) if item.state == node), None)
+    for tried in (small, _alone(small, node)):
+        item = next((item for item in table_storages(tried) if item.state == node), None)
+        if item is not None:
+            return item
+    return None
+
+
+def _alone(table: StateTable, node: str) -> StateTable:
+    """Return the table of one node, the other nodes being inputs."""
+    own = table.nodes.index(node)
+    others = [place for place in range(len(table.nodes)) if place != own]
+    rows = [
+        (
+            (*inputs, *(current[place] for place in others)),
+            (current[own],),
+            (following[own],),
+        )
+        for inputs, current, following in table.rows
+    ]
+    names = (*table.inputs, *(table.nodes[place] for place in others))
+    return StateTable(names, (node,), tuple(dict.fromkeys(rows)))
 
 
 def _possible(table: StateTable, row: Row, known: Mapping[str, int]) -> bool:
