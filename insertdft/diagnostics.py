@@ -92,6 +92,7 @@ SLUGS: Final[dict[str, str]] = {
     "shift-clock-gated": "Logic can keep a shift clock from a latch",
     "negative-edge-in-lssd": "A falling-edge flip-flop has no two-phase form",
     "latch-copy": "A latch copies the state of a position and needs no scan of its own",
+    "clocks-overlap": "Two clocks that must never be on together would be",
     # trace
     "chain-broken": "A scan chain cannot be walked from its scan-out to its scan-in",
     "chain-differs": "A scan chain is not what the chain description says",

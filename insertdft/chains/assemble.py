@@ -2,6 +2,7 @@
 
 from collections.abc import Iterable, Mapping, Sequence
 from hashlib import sha256
+from itertools import product
 from typing import Final
 
 import numpy as np
@@ -20,12 +21,14 @@ from insertdft.chains.plan import (
     Segment,
 )
 from insertdft.chains.wishes import Wishes
-from insertdft.description import TestPort
+from insertdft.description import Cycle, TestPort
 from insertdft.design.flat import Design
+from insertdft.diagnostics import DesignError, error
 from insertdft.library import find_buffers
 from insertdft.netlist import OPEN, Instance, Module
 from insertdft.styles import Conversion, TestNet, in_port_order, kind_of
 from insertdft.styles.lssd import EDGE_CLOCK_B
+from insertdft.styles.overlaps import find_overlaps
 from insertdft.styles.sequences import Clocking, make_sequences
 from insertdft.survey import Survey
 
@@ -66,6 +69,8 @@ def assemble(
         for number, (group, _) in enumerate(arrangement.chains)
     )
     connector = _connector(design, wishes)
+    sequences = make_sequences(_clocking(survey, chosen, shifts, port_names))
+    _check_overlaps(survey, chosen, port_names, sequences)
     added, without = _added_area(survey, chosen, modules, connector)
     return Plan(
         design=design.netlist.top,
@@ -77,12 +82,13 @@ def assemble(
         port_names=port_names,
         connector=connector,
         ports=_ports(survey, wishes, chosen, modules[design.netlist.top], port_names),
-        sequences=make_sequences(_clocking(survey, chosen, shifts, port_names)),
+        sequences=sequences,
         left_alone=_left_alone(survey, chosen),
         lower_bound=arrangement.lower_bound,
         area_before=survey.area,
         area_after=survey.area + added,
         without_area=tuple(sorted({*survey.without_area, *without})),
+        shared_l2=chosen.lssd.saved,
     )
 
 
@@ -145,6 +151,42 @@ def _clocking(
         capture=tuple((clock,) for clock in _system_clocks(survey, chosen)),
         settle=(settle,) if settle else (),
     )
+
+
+def _check_overlaps(
+    survey: Survey,
+    chosen: Chosen,
+    port_names: Mapping[str, str],
+    sequences: Mapping[str, tuple[Cycle, ...]],
+) -> None:
+    """Refuse sequences in which two LSSD clocks could be on together: A, B and C never may.
+
+    The phases that are made never do; a port that is C for some latches and B for others does.
+    """
+    if not chosen.lssd.conversion:
+        return
+    rests = _system_clocks(survey, chosen) | chosen.lssd.shift_b
+    a_ports = [port for net, port in port_names.items() if kind_of(net) == TestNet.CLOCK_A]
+    b_ports = _opens_l2(chosen, port_names)
+    c_ports = list(chosen.lssd.capture)
+    pairs = [*product(a_ports, b_ports), *product(a_ports, c_ports), *product(b_ports, c_ports)]
+    both = sorted({first for first, second in pairs if first == second})
+    found = [f"`{port}` opens both latches of a position" for port in both]
+    apart = [pair for pair in pairs if pair[0] != pair[1]]
+    found += [
+        f"`{at.first}` and `{at.second}` in {at.sequence}: {at.why}"
+        for at in find_overlaps(sequences, apart, rests)
+    ]
+    if found:
+        raise DesignError(
+            [
+                error(
+                    "clocks-overlap",
+                    f"clocks that must never be on together are: {found[0]}",
+                    hint="give masters and slaves clock ports of their own",
+                )
+            ]
+        )
 
 
 def _opens_l2(chosen: Chosen, port_names: Mapping[str, str]) -> tuple[str, ...]:

@@ -140,6 +140,7 @@ class Plan:
         area_before: Sum of the areas of the cells before.
         area_after: The same after the plan is applied.
         without_area: Cells in use that state no area and so are not counted.
+        shared_l2: LSSD: second latches that L1/L2* saved.
     """
 
     design: str
@@ -157,3 +158,4 @@ class Plan:
     area_before: float
     area_after: float
     without_area: tuple[str, ...]
+    shared_l2: int = 0

@@ -43,6 +43,7 @@ def conversion_data(done: Conversion, files: Sequence[str]) -> dict[str, Any]:
             for port in plan.ports
             if not port.added and port.shift is not None
         },
+        "shared_l2": plan.shared_l2,
         "traced": len(done.traced.problems) == 0,
         "problems": [to_json(item) for item in done.traced.problems],
         "findings": [to_json(item) for item in done.findings],
@@ -86,7 +87,7 @@ def _chain_data(chain: Chain) -> dict[str, Any]:
 
 def conversion_screen(data: Mapping[str, Any]) -> str:
     """Return the summary of a conversion as text that fits one screen."""
-    converted = sum(way["count"] for way in data["converted"])
+    converted = data["storage_cells"] - sum(data["left_alone"].values())
     title = (
         f"{data['design']}: {converted} of {data['storage_cells']} storage cells in"
         f" {len(data['chains'])} {data['style']} chains"
@@ -102,6 +103,7 @@ def conversion_screen(data: Mapping[str, Any]) -> str:
         ("cells", _ways(data["converted"])),
         ("left alone", _reasons(data["left_alone"])),
         ("area", _area(area)),
+        *([("L1/L2*", f"saved {data['shared_l2']} L2 latches")] if data["shared_l2"] else []),
         ("new ports", _ranges(data["new_ports"])),
         ("hold in test", ", ".join(f"{at}={on}" for at, on in data["held_in_test"].items()) or "-"),
         ("trace", _traced(data)),
