@@ -13,6 +13,7 @@ from insertdft.description import Chain, Description
 from insertdft.design.flat import Design
 from insertdft.exports.frames import FREE, SCAN, Frame, Program, leading_scans
 from insertdft.simulate.state import Machine
+from insertdft.simulate.two_clocks import start_marks, with_two_clock_cells
 from insertdft.simulate.words import Words, pack, unpack
 
 
@@ -85,7 +86,9 @@ class _Batch:
             name: pack(np.array([mine == name for mine in self.names])) for name in program.captures
         }
         self.everywhere = pack(np.ones(self.lanes, np.bool_))
-        self.machine = Machine(design, words=len(self.everywhere))
+        self.machine = Machine(with_two_clock_cells(design), words=len(self.everywhere))
+        self.machine.force(program.off)
+        start_marks(self.machine)
         self.at = 0
 
     def run(self) -> tuple[Pattern, ...]:
