@@ -1,6 +1,7 @@
 """The test bench in Icarus: passes on what was converted, fails on anything else."""
 
 import re
+import subprocess
 from pathlib import Path
 
 import pytest
@@ -42,23 +43,22 @@ def test_a_wrong_gate_fails_where_captures_are_compared(tmp_path: Path) -> None:
         assert any("expected" in line for line in lines)
 
 
-def test_all_sequences_and_all_values_are_compared_in_mux_d(tmp_path: Path) -> None:
+def test_all_sequences_and_all_values_are_compared_in_mux_d() -> None:
     good = made("mux-d")
     patterns = good.given.patterns or ()
 
     assert {at.sequence for at in patterns} == {"capture", "launch_on_capture", "launch_on_shift"}
     assert not any("X" in row for at in patterns for row in (*at.measured, *at.unload))
-    for at in patterns:
-        for number in range(len(at.measured[0])):
-            assert at.measured[0][number] in "LH"
 
 
 def test_the_bench_dumps_waves_only_when_asked(tmp_path: Path) -> None:
     good = made("mux-d", count=1)
     run_bench(tmp_path, to_bench(good.given), good.text)
-
     assert not list(tmp_path.glob("*.vcd"))
-    assert "$value$plusargs" in to_bench(good.given)
+
+    words = ["vvp", "-n", "program.vvp", "+vcd=waves.vcd"]
+    subprocess.run(words, cwd=tmp_path, check=True, capture_output=True)
+    assert "$enddefinitions" in (tmp_path / "waves.vcd").read_text("latin-1")
 
 
 def test_two_runs_give_the_same_bytes() -> None:
