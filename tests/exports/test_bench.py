@@ -30,8 +30,8 @@ def test_a_swapped_scan_connection_fails_in_every_style(every_style: Made, tmp_p
     assert run_bench(tmp_path, to_bench(every_style.given), wrong)[-1].startswith("FAIL: ")
 
 
-def test_a_wrong_gate_fails_where_captures_are_compared(tmp_path: Path) -> None:
-    good = made("mux-d")
+def test_a_wrong_gate_fails_where_captures_are_compared(every_style: Made, tmp_path: Path) -> None:
+    good = every_style
     for number in range(2):
         parts = good.text.split("nand2_w1")
         wrong = (
@@ -43,9 +43,8 @@ def test_a_wrong_gate_fails_where_captures_are_compared(tmp_path: Path) -> None:
         assert any("expected" in line for line in lines)
 
 
-def test_all_sequences_and_all_values_are_compared_in_mux_d() -> None:
-    good = made("mux-d")
-    patterns = good.given.patterns or ()
+def test_all_sequences_and_all_values_are_compared(every_style: Made) -> None:
+    patterns = every_style.given.patterns or ()
 
     assert {at.sequence for at in patterns} == {"capture", "launch_on_capture", "launch_on_shift"}
     assert not any("X" in row for at in patterns for row in (*at.measured, *at.unload))
