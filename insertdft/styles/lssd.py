@@ -122,7 +122,9 @@ def _best(library: Library, cell: Cell, kind: SrlKind, taken: Taken) -> Conversi
         "no-scan-cell",
         f"the library has no level-sensitive scan cell for `{cell.name}` ({kind.value}), and none"
         " can be composed from its NAND gates and inverters",
-        "give a library that has one (signal_type test_scan_clock_a, test_scan_clock_b)",
+        "give a library that has one (signal_type test_scan_clock_a, test_scan_clock_b); a"
+        " flip-flop can become a double latch with --flip-flops two-phase, whose B has to be driven"
+        " in mission too",
     )
 
 

@@ -264,7 +264,8 @@ nor (strong0 ;|nor #(1 g ;|and # ;|wire ;|wire [ ;|wire # ;|wire (small) ;|wire 
 wire inout io ;|wire [1:0 n ;|wire n[ ;|assign ;|assign # ;|assign (strong0 a ;|assign y ;
 X # u () ;|X #u ;|X ;|X u ;|X u ) ;|X u ( ;|X u (.A) ;|X u (.A( ) ;|X u (.A({a a})) ;
 X u (.A(x(,.B(q),.C(z ), .Y(n1)) ;|X #(.(1)) u () ;|X #) u () ;|X #(.P(1')) u () ;|parameter ;
-parameter A ;|3 ;|. ;|( ;|X u (.A({})) ;|X u (.A({2{}})) ;|X u (.A({a,})) ;|X u (.A(y[])) ;|X u (.A(y[1:])) ;
+parameter A ;|3 ;|. ;|( ;|X u (.A({})) ;|X u (.A({2{}})) ;|X u (.A({a,})) ;|X u (.A(y[])) ;
+X u (.A(y[1:])) ;
 X u (.A(1'b)) ;|X u (.A(y[a])) ;|(* = 1 *) X u () ;|(* a (* b *) X u () ;
 """
 
