@@ -9,7 +9,7 @@ from insertdft.proof.aig import Lits
 from insertdft.proof.circuit import Buses, Circuit, Elements, TableBlock
 from insertdft.proof.lay import BOX, BUS, PORT, Laid, Work, driven, lay_down
 from insertdft.proof.loops import NetNodes, choose_cuts
-from insertdft.proof.order import order_nodes
+from insertdft.proof.order import Order, order_nodes
 from insertdft.proof.template import LOOP
 
 
@@ -48,8 +48,7 @@ def make_circuit(design: Design) -> Circuit:
         _fill(graph, laid)
     buses = _join_buses(work, graph)
     graph.settle()
-    cut = _cut_loops(work, graph)
-    order, _ = order_nodes(graph.left, graph.right, _nothing_to_cut)
+    order, cut = _cut_loops(work, graph)
     elements = [block for laid in work.laid for block in _elements(laid)]
     return Circuit(
         design=design,
@@ -124,26 +123,28 @@ def _bus_drivers(work: Work) -> tuple[dict[int, list[tuple[int, int]]], dict[int
     return drivers, pulls
 
 
-def _cut_loops(work: Work, graph: _Graph) -> Elements:
-    """Make the cut nodes of loops leaves, and return them as states."""
+def _cut_loops(work: Work, graph: _Graph) -> tuple[Order, Elements]:
+    """Make the cut nodes of loops leaves; return the order of the rest, and them as states."""
     alone = work.driver >= 0
     nets = NetNodes(np.where(alone, work.net >> 1, -1).astype(np.int32), work.driver)
 
     def cut_of(on_loops: Lits) -> Lits:
         return choose_cuts(work.design, nets, graph.left, graph.right, on_loops)
 
-    _, cut = order_nodes(graph.left, graph.right, cut_of)
+    order, cut = order_nodes(graph.left, graph.right, cut_of)
     cut = np.sort(cut)
     copies = [graph.conj(int(graph.left[at]), int(graph.right[at])) for at in cut.tolist()]
     graph.settle()
     graph.left[cut] = -1
     graph.right[cut] = -1
+    if len(cut):
+        order, _ = order_nodes(graph.left, graph.right, _nothing_to_cut)
     by_node = np.full(len(graph.left), -1, np.int64)
     owned = np.flatnonzero(alone)[::-1]
     by_node[work.net[owned] >> 1] = owned  # the lowest net of a node is written last
     net = by_node[cut]
     instance = np.where(net >= 0, work.driver[np.maximum(net, 0)], -1)
-    return Elements(
+    return order, Elements(
         instance=instance.astype(np.int64),
         state=np.zeros(len(cut), np.int64),
         kind=np.full(len(cut), LOOP, np.int64),

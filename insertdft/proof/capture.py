@@ -13,10 +13,12 @@ import numpy as np
 from insertdft.description import Description
 from insertdft.design.flat import Design
 from insertdft.proof.aig import FALSE, TRUE, Lits
+from insertdft.proof.circuit import evaluate
 from insertdft.proof.joint import AFTER, Joint
 from insertdft.proof.mission import mission_obligations
 from insertdft.proof.obligations import Block
 from insertdft.proof.order import Numbers
+from insertdft.proof.part import cone_of
 from insertdft.proof.result import Count
 from insertdft.proof.shift import Shift, shift_values
 from insertdft.proof.storage import forms_of, state_name
@@ -116,6 +118,11 @@ def _clocks_arrive(joint: Joint, description: Description, rows: Numbers) -> Shi
 
 
 def _clock_values(joint: Joint, held: Mapping[str, int], rows: Numbers) -> tuple[Lits, Numbers]:
-    values = joint.values(AFTER, held)
-    forms = forms_of(joint.after.circuit, joint.aig, values)
+    """Return the clocks of states, and their kinds; only what leads to clocks is worked out."""
+    circuit = joint.after.circuit
+    roots = [circuit.elements.clock, *(block.inputs.ravel() for block in circuit.tables)]
+    order, bounds = cone_of(circuit, np.concatenate(roots))
+    values = joint.start(AFTER, held)
+    evaluate(circuit, joint.aig, values, order, bounds)
+    forms = forms_of(circuit, joint.aig, values)
     return forms.clock[rows], forms.kind[rows]

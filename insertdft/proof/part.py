@@ -55,10 +55,12 @@ def part_for(circuit: Circuit, values: Lits, roots: Lits) -> Part:
     return Part(np.flatnonzero(rows), tuple(tables), order, bounds)
 
 
-def whole(circuit: Circuit) -> Part:
-    """Return all of a circuit."""
-    rows = np.arange(len(circuit.elements.leaf))
-    return Part(rows, tuple(circuit.tables), circuit.order, circuit.bounds)
+def cone_of(circuit: Circuit, roots: Lits) -> tuple[Lits, Numbers]:
+    """Return order and levels of what literals depend on without passing a state."""
+    needed = np.zeros(len(circuit.left), np.bool_)
+    free = np.full(len(circuit.left), TRUE + 1, np.int32)
+    _mark(circuit, free, needed, np.unique(roots >> 1))
+    return _kept(circuit, free, needed)
 
 
 def _mark(circuit: Circuit, values: Lits, needed: Flags, front: Lits) -> None:

@@ -7,43 +7,26 @@ is so for every content of the chains and whatever the rest of the design does. 
 together are moved one after the other, in both orders, so that a bit that skew could lose is lost.
 """
 
-from collections.abc import Mapping
+from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, field
-from typing import Final
 
 import numpy as np
 
-from insertdft.description import Chain, ChainCell, Description
-from insertdft.design.flat import Design
-from insertdft.netlist import FIRST_NET, OPEN
-from insertdft.netlist.names import join_path
+from insertdft.description import Chain, Description
+from insertdft.netlist import OPEN
 from insertdft.proof.aig import TRUE, Lits
 from insertdft.proof.circuit import at
 from insertdft.proof.joint import AFTER, Joint
 from insertdft.proof.lay import PORT
-from insertdft.proof.match import Side, shown_at
+from insertdft.proof.match import Side
 from insertdft.proof.obligations import Block
+from insertdft.proof.order import Numbers
 from insertdft.proof.part import part_for
 from insertdft.proof.phases import Machine, UnsettledError
-from insertdft.proof.template import LOOP
+from insertdft.proof.places import BY_LOOP, ChainPlaces, Position, find_places
 
-BY_LOOP: Final = -1
-
-
-@dataclass(frozen=True, slots=True)
-class Position:
-    """Where a chain position shows its state.
-
-    Attributes:
-        net: Flat net, OPEN if the description names none that exists.
-        turned: Whether the net shows the inverse of the state; BY_LOOP for a position made of
-            gates, whose state is that of the cell it replaced.
-        states: Places of the states of its instance.
-    """
-
-    net: int
-    turned: int
-    states: tuple[int, ...]
+#: Ports that pulse together, one such group after the other.
+Phases = tuple[tuple[str, ...], ...]
 
 
 @dataclass(frozen=True, slots=True, eq=False)
@@ -74,7 +57,7 @@ def shift_values(description: Description, name: str) -> dict[str, int]:
     return {port: int(value) for port, value in held.items() if value is not None}
 
 
-def shift_pulses(description: Description) -> tuple[tuple[str, ...], ...]:
+def shift_pulses(description: Description) -> Phases:
     """Return the phases of one shift cycle."""
     cycles = description.sequences.get("shift", ())
     if cycles:
@@ -88,77 +71,91 @@ def shift_pulses(description: Description) -> tuple[tuple[str, ...], ...]:
 
 def shift_obligations(joint: Joint, description: Description) -> Shift:
     """Return what must hold of every chain."""
-    side = joint.after
-    where = _Finder(side)
-    places = {
-        chain.name: [where.position(cell) for cell in chain.cells] for chain in description.chains
-    }
+    places = find_places(joint.after, description.chains)
     lost = [
         cell.slave or cell.instance
-        for chain in description.chains
-        for cell, place in zip(chain.cells, places[chain.name], strict=True)
-        if place.net == OPEN
+        for place in places
+        for cell, net in zip(place.chain.cells, place.nets.tolist(), strict=True)
+        if net == OPEN
     ]
     if lost:
         return Shift((), tuple((name, f"`{name}` shows no state to a net") for name in lost))
     bench = _bench(joint, description, places)
-    phases = shift_pulses(description)
     blocks: list[Block] = []
     wrong: list[tuple[str, str]] = []
-    for number, order in enumerate(_orders(phases)):
+    for number, phases in enumerate(_orders(shift_pulses(description))):
         kind = "shift" if number == 0 else "shift, clocks in the other order"
         try:
-            run = bench.run(order)
+            run = bench.run(phases)
         except UnsettledError:
-            subject = description.chains[0].name if description.chains else "shift"
+            subject = description.chains[0].name
             wrong.append((subject, "latches of a chain are open together: its data races through"))
             continue
-        blocks += [
-            block
-            for chain in description.chains
-            for block in _chain_blocks(run, chain, places[chain.name], kind)
-        ]
+        for place in places:
+            blocks += [*_moves(run, place, kind), *_in_time(run, place)]
     return Shift(tuple(blocks), tuple(wrong))
 
 
-def _orders(phases: tuple[tuple[str, ...], ...]) -> list[tuple[tuple[str, ...], ...]]:
+def _orders(phases: Phases) -> list[Phases]:
     back = tuple(tuple(reversed(phase)) for phase in phases)
     return [phases] if back == phases else [phases, back]
 
 
 @dataclass(frozen=True, slots=True, eq=False)
 class _Run:
-    """Values at rest before and after one shift cycle.
+    """Values at rest before, during and after one shift cycle.
 
     Attributes:
         side: The converted netlist.
+        phases: What pulsed.
         before: Literals of all nodes.
-        after: Literals of all nodes.
-        rest: Net values, and state values, that do not depend on the cycle: by state place the
-            variable it had.
-        ports: Variable of each scan-in.
+        on: The same while the clocks of each phase were on.
+        off: The same after each phase.
+        state_of: Variable -> place of the state that it was before.
+        ports: Variable of each scan-in while it was valid.
+        rest: Values of clocks at rest, where they are no 0.
     """
 
     side: Side
+    phases: Phases
     before: Lits
-    after: Lits
+    on: list[Lits] = field(repr=False)
+    off: list[Lits] = field(repr=False)
     state_of: Mapping[int, int] = field(repr=False)
     ports: Mapping[str, int] = field(repr=False)
+    rest: Mapping[str, int] = field(repr=False)
 
-    def net(self, values: Lits, net: int) -> int:
-        """Return the literal of a net."""
-        return int(at(values, self.side.circuit.net[[net]])[0])
+    def nets(self, values: Lits, nets: Numbers) -> Lits:
+        """Return the literals of nets."""
+        return at(values, self.side.circuit.net[nets])
+
+    def phase_of(self, port: str) -> int:
+        """Return the last phase in which a port pulses, -1 if in none."""
+        return max((at for at, phase in enumerate(self.phases) if port in phase), default=-1)
 
 
 @dataclass(frozen=True, slots=True, eq=False)
 class _Bench:
+    """One shift cycle, ready to be simulated.
+
+    Attributes:
+        joint: Both netlists.
+        chains: Of the converted one.
+        held: Values of ports, clocks at rest.
+        roots: Literals that matter.
+    """
+
     joint: Joint
-    description: Description
+    chains: Sequence[Chain]
     held: Mapping[str, int]
     roots: Lits
 
-    def run(self, phases: tuple[tuple[str, ...], ...]) -> _Run:
-        """Simulate one shift cycle."""
+    def run(self, phases: Phases) -> _Run:
+        """Simulate one shift cycle.
+
+        Once the first clock of a chain has pulsed, its scan-in becomes another variable: a cell
+        that still listens then takes what it must not.
+        """
         joint, circuit = self.joint, self.joint.after.circuit
         clocks = {port for phase in phases for port in phase}
         moving = {port: value for port, value in self.held.items() if port not in clocks}
@@ -170,69 +167,64 @@ class _Bench:
         machine = Machine(circuit, joint.aig, values, part)
         machine.settle()
         before = machine.values.copy()
+        ports = {
+            chain.scan_in: int(before[circuit.leaves[PORT, chain.scan_in]])
+            for chain in self.chains
+            if (PORT, chain.scan_in) in circuit.leaves
+        }
+        leaves = joint.after.states.leaf.tolist()
+        state_of = {int(before[leaf]): place for place, leaf in enumerate(leaves)}
+        run = _Run(joint.after, phases, before, [], [], state_of, ports, self.held)
         for phase in phases:
-            for level in (1, 0):
+            for level, seen in ((1, run.on), (0, run.off)):
                 for port in phase:
                     if (PORT, port) in circuit.leaves:
                         machine.move(port, self.held.get(port, 0) ^ level)
-        leaves = joint.after.states.leaf
-        state_of = {int(before[leaf]): place for place, leaf in enumerate(leaves.tolist())}
-        ports = {
-            chain.scan_in: joint.leaves.get((PORT, chain.scan_in), TRUE)
-            for chain in self.description.chains
-        }
-        return _Run(joint.after, before, machine.values, state_of, ports)
+                seen.append(machine.values.copy())
+            self._forget(machine, phase)
+        return run
+
+    def _forget(self, machine: Machine, phase: tuple[str, ...]) -> None:
+        """Let the scan-ins of chains whose first clock has pulsed change."""
+        leaves = self.joint.after.circuit.leaves
+        for chain in self.chains:
+            if set(chain.clocks[:1]) & set(phase) and (PORT, chain.scan_in) in leaves:
+                machine.move(chain.scan_in, self.joint.aig.variable())
 
 
-def _bench(joint: Joint, description: Description, places: Mapping[str, list[Position]]) -> _Bench:
-    circuit = joint.after.circuit
-    nets = [place.net for row in places.values() for place in row]
-    nets += [joint.after.design.port_nets[chain.scan_out] for chain in description.chains]
-    roots = np.unique(circuit.net[np.array(nets, np.int64)])
-    return _Bench(joint, description, shift_values(description, "shift"), roots)
+def _bench(joint: Joint, description: Description, places: Sequence[ChainPlaces]) -> _Bench:
+    nets = np.concatenate([np.append(place.nets, place.out) for place in places])
+    roots = np.unique(joint.after.circuit.net[nets])
+    return _Bench(joint, description.chains, shift_values(description, "shift"), roots)
 
 
-def _chain_blocks(run: _Run, chain: Chain, places: list[Position], kind: str) -> list[Block]:
-    """Return what one chain must do in one cycle."""
-    wanted: list[int] = []
-    found: list[int] = []
-    held = run.ports[chain.scan_in]
-    for cell, place in zip(chain.cells, places, strict=True):
-        wanted.append(held ^ int(cell.inverted))
-        rest = run.net(run.before, place.net)
-        turned = rest & 1 if place.turned == BY_LOOP else place.turned
-        value = run.net(run.after, place.net) ^ turned
+def _moves(run: _Run, place: ChainPlaces, kind: str) -> list[Block]:
+    """Return that one chain moves by one position in one cycle."""
+    chain = place.chain
+    rest = run.nets(run.before, place.nets)
+    turned = np.where(place.turned == BY_LOOP, rest & 1, place.turned).astype(np.int32)
+    found = run.nets(run.off[-1], place.nets) ^ turned
+    for row, cell in enumerate(chain.cells):
         for _ in range(cell.bits - 1):
-            value = _one_bit_back(run, place, value)
-        found.append(value)
-        held = rest ^ turned
-    out = run.net(run.before, run.side.design.port_nets[chain.scan_out])
+            found[row] = _one_bit_back(run, place.positions[row], int(found[row]))
+    first = np.array([run.ports.get(chain.scan_in, TRUE)], np.int32)
+    sources = np.concatenate((first, rest ^ turned))
+    inverted = np.array([cell.inverted for cell in chain.cells], np.int32)
+    last = sources[-1:] ^ int(chain.inverted_out)
+    out = run.nets(run.before, np.array([place.out]))
     names = [cell.instance for cell in chain.cells]
-    sources = [f"scan-in `{chain.scan_in}`", *(f"`{name}`" for name in names)]
-
-    def name(row: int) -> str:
-        return names[row]
+    giving = [f"scan-in `{chain.scan_in}`", *(f"`{name}`" for name in names)]
 
     def fact(row: int) -> str:
         return (
             f"`{names[row]}`, position {row + 1} of chain `{chain.name}`, does not take what"
-            f" {sources[row]} held one shift cycle before"
+            f" {giving[row]} held one shift cycle before"
         )
 
-    def out_name(row: int) -> str:
-        del row
-        return chain.scan_out
-
-    def out_fact(row: int) -> str:
-        del row
-        return (
-            f"scan-out `{chain.scan_out}` of chain `{chain.name}` does not show its last position"
-        )
-
-    last = np.array([held ^ int(chain.inverted_out)], np.int32)
+    shown = f"scan-out `{chain.scan_out}` of chain `{chain.name}` does not show its last position"
     return [
-        Block(kind, np.array(wanted, np.int32), np.array(found, np.int32), None, name, fact),
-        Block("scan-out", last, np.array([out], np.int32), None, out_name, out_fact),
+        Block(kind, sources[:-1] ^ inverted, found, None, names.__getitem__, fact),
+        Block("scan-out", last, out, None, lambda _: chain.scan_out, lambda _: shown),
     ]
 
 
@@ -240,61 +232,39 @@ def _one_bit_back(run: _Run, place: Position, value: int) -> int:
     """Return what the bit that ``value`` came from holds after the cycle, if it is of the cell."""
     for turned in (0, 1):
         state = run.state_of.get(value ^ turned)
-        if state in place.states and state is not None:
-            return int(run.after[run.side.states.leaf[state]]) ^ turned
+        if state is not None and state in place.states:
+            return int(run.off[-1][run.side.states.leaf[state]]) ^ turned
     return value
 
 
-class _Finder:
-    """Finds the net at which a position shows its state."""
+def _in_time(run: _Run, place: ChainPlaces) -> list[Block]:
+    """Return that the positions of a chain change when its clocks say, and not at another time."""
+    chain = place.chain
+    phase = run.phase_of(chain.clocks[-1]) if chain.clocks else -1
+    if phase < 0:
+        return []
+    before = run.nets(run.before, place.nets)
+    names = [cell.instance for cell in chain.cells]
 
-    def __init__(self, side: Side) -> None:
-        self._side = side
-        design = side.design
-        self._states: dict[str, list[int]] = {}
-        for place, instance in enumerate(side.states.instance.tolist()):
-            if side.states.kind[place] != LOOP:
-                self._states.setdefault(design.name(instance), []).append(place)
-        self._occurrences = {
-            join_path(design.path(number)): number for number in range(1, len(design.occurrences))
-        }
+    def block(wanted: Lits, found: Lits, words: str) -> Block:
+        return Block(
+            "shift clocks",
+            wanted,
+            found,
+            None,
+            names.__getitem__,
+            lambda row: f"`{names[row]}` of chain `{chain.name}` {words}",
+        )
 
-    def position(self, cell: ChainCell) -> Position:
-        """Return where a position shows its state."""
-        name = cell.slave or cell.instance
-        states = self._states.get(name, [])
-        if states:
-            return self._of_cell(cell, states)
-        number = self._occurrences.get(name)
-        return Position(OPEN, 0, ()) if number is None else self._of_module(cell, number)
-
-    def _of_cell(self, cell: ChainCell, states: list[int]) -> Position:
-        side = self._side
-        design = side.design
-        instance = int(side.states.instance[states[0]])
-        net = design.net_at(instance, cell.scan_out)
-        library_cell = design.cell_of(instance)
-        if library_cell is None:
-            return Position(OPEN, 0, ())
-        turned = [
-            inverted
-            for state in states
-            for pin, inverted in shown_at(library_cell, int(side.states.state[state]))
-            if pin == cell.scan_out
-        ]
-        own = self._states.get(cell.instance, states)
-        return Position(net, turned[0] if turned else 0, tuple(own))
-
-    def _of_module(self, cell: ChainCell, number: int) -> Position:
-        """Return the net of a port of a module; whether it is inverted is left to its loop."""
-        design = self._side.design
-        return Position(_port_net(design, number, cell.scan_out), BY_LOOP, ())
-
-
-def _port_net(design: Design, occurrence: int, pin: str) -> int:
-    place = design.occurrences[occurrence]
-    for port in design.netlist.modules[place.module].ports:
-        for name, net in zip(port.bit_names(), port.nets, strict=True):
-            if name == pin:
-                return int(design.net_of[place.net_base + net - FIRST_NET])
-    return OPEN
+    clock = f"`{chain.clocks[-1]}`"
+    first_edge = "fall" if run.rest.get(chain.clocks[-1]) else "rise"
+    if chain.edge == first_edge:
+        off, on = (run.nets(values[phase], place.nets) for values in (run.off, run.on))
+        return [block(off, on, f"changes at the other edge of {clock}")]
+    if chain.edge in ("rise", "fall"):
+        on = run.nets(run.on[phase], place.nets)
+        return [block(before, on, f"changes at the other edge of {clock}")]
+    if chain.edge is None and phase > 0:
+        early = run.nets(run.off[phase - 1], place.nets)
+        return [block(before, early, f"changes before {clock} opens its second latch")]
+    return []
