@@ -244,18 +244,26 @@ class _Writer:
         parts = []
         if self.free:
             parts.append(f'"free_inputs" = {"".join(free[port] for port in self.free)};')
-        scans = "".join(
-            load[chain.length + number]
-            for number in range(extra)
+        rows = [
+            load[chain.length :][:extra]
             for chain, load in zip(self.chains, pattern.load, strict=True)
-        )
+        ]
         if self.shared:
-            scans += "".join(free.get(port, "0") for port in self.scan_ins)
-        if scans:
-            parts.append(f'"scan_inputs" = {scans};')
-        parts.append(f'"all_outputs" = {"".join(pattern.measured)};')
+            rows = [row + free.get(at, "0") for row, at in zip(rows, self.scan_ins, strict=True)]
+        parts += _arguments("scan_inputs", self.scan_ins, rows)
+        seen = ["".join(letters) for letters in zip(*pattern.measured, strict=True)]
+        parts += _arguments("all_outputs", self.program.outputs, seen)
         inner = "\n    ".join(parts)
         return f"Call {quoted(pattern.sequence)} {{\n    {inner} }}"
+
+
+def _arguments(group: str, ports: Sequence[str], rows: Sequence[str]) -> list[str]:
+    """Return the data of a group: at once for one cycle, port by port for several."""
+    if not rows or not rows[0]:
+        return []
+    if len(rows[0]) == 1:
+        return [f'"{group}" = {"".join(rows)};']
+    return [f"{quoted(port)} = {row};" for port, row in zip(ports, rows, strict=True)]
 
 
 def _only(frame: Frame, port: str) -> tuple[tuple[str, ...], ...]:
