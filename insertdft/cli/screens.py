@@ -153,7 +153,8 @@ def _ways(ways: Sequence[Mapping[str, Any]]) -> str:
         words = f"{'; ' if text else ''}{way['count']} {way['cell']} {goal}"
         if text and len(text) + len(words) > WIDTH:
             rest = sum(other["count"] for other in ways[number:])
-            return f"{text}; {rest} of {len(ways) - number} other kinds"
+            kinds = len(ways) - number
+            return f"{text}; {rest} of {kinds} other kind{'s' if kinds > 1 else ''}"
         text += words
     return text
 
