@@ -57,10 +57,16 @@ def part_for(circuit: Circuit, values: Lits, roots: Lits) -> Part:
 
 def cone_of(circuit: Circuit, roots: Lits) -> tuple[Lits, Numbers]:
     """Return order and levels of what literals depend on without passing a state."""
+    free = np.full(len(circuit.left), TRUE + 1, np.int32)
+    return _kept(circuit, free, reached(circuit, roots))
+
+
+def reached(circuit: Circuit, roots: Lits) -> Flags:
+    """Return which nodes literals depend on without passing a state."""
     needed = np.zeros(len(circuit.left), np.bool_)
     free = np.full(len(circuit.left), TRUE + 1, np.int32)
     _mark(circuit, free, needed, np.unique(roots >> 1))
-    return _kept(circuit, free, needed)
+    return needed
 
 
 def _mark(circuit: Circuit, values: Lits, needed: Flags, front: Lits) -> None:

@@ -7,13 +7,13 @@ time. Each is a real mistake: pins that do the same are not swapped, equal nets 
 import re
 from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
-from itertools import combinations
+from itertools import combinations, pairwise
 
 from insertdft.design.flat import Design
 from insertdft.library import Library, find_inverters
-from insertdft.library.finders import Gate
 from insertdft.library.cell import Cell
 from insertdft.library.expression import Expression, Var
+from insertdft.library.finders import Gate
 from insertdft.library.functions import renamed, same
 
 PIN = re.compile(r"\.(\w+(?:\s*\[\d+\])?|\\\S+ )\s*\(\s*([^()]*?)\s*\)")
@@ -89,7 +89,7 @@ def mistakes(before: str, after: str, design: Design, ports: Iterable[str]) -> I
 
 def _between(after: str, statements: list[Statement], library: Library) -> Iterator[Mistake]:
     """Swap a pin's nets between two instances, or give one the other's."""
-    for one, other in zip(statements, statements[1:], strict=False):
+    for one, other in pairwise(statements):
         if one.cell != other.cell:
             continue
         roles = _roles(library.cells.get(one.cell))
@@ -109,9 +109,7 @@ def _changed(before: str, after: str, design: Design) -> list[Statement]:
     for module in design.netlist.modules.values():
         starts, ends = module.instance_start.tolist(), module.instance_end.tolist()
         cells = [design.netlist.cell_names[at] for at in module.instance_cell.tolist()]
-        for name, cell, start, end in zip(
-            module.instance_names, cells, starts, ends, strict=True
-        ):
+        for name, cell, start, end in zip(module.instance_names, cells, starts, ends, strict=True):
             statement = after[start:end]
             if statement not in before and _is_top_level(design, module.name):
                 inputs = _inputs(design, cell, statement, start)
