@@ -5,13 +5,19 @@ run on the written netlist from unknown states; what it cannot know is not compa
 """
 
 from collections.abc import Mapping, Sequence
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 import numpy as np
 
 from insertdft.description import Chain, Description
 from insertdft.design.flat import Design
 from insertdft.exports.frames import FREE, SCAN, Frame, Program, leading_scans
+from insertdft.exports.places import (
+    hold_load,
+    places_of,
+    set_before_last_shift,
+    unloaded,
+)
 from insertdft.simulate.state import Machine
 from insertdft.simulate.two_clocks import start_marks, with_two_clock_cells
 from insertdft.simulate.words import Words, pack, unpack
@@ -89,29 +95,68 @@ class _Batch:
         self.machine = Machine(with_two_clock_cells(design), words=len(self.everywhere))
         self.machine.force(program.off)
         start_marks(self.machine)
+        self.places = places_of(self.machine.circuit, self.chains)
         self.at = 0
 
     def run(self) -> tuple[Pattern, ...]:
         """Return the patterns with what the simulator expects."""
         for frame in self.program.setup:
             self._all(frame)
-        self._shift()
+        self._load()
         measured: list[list[str]] = [[] for _ in self.names]
         for step in range(max(map(len, self.program.captures.values()))):
             self._step(step, measured)
-        ends = self._shift()
+        ends = self._unload()
         return tuple(self._pattern(lane, measured[lane], ends) for lane in range(self.lanes))
 
-    def _shift(self) -> list[list[str]]:
-        """Shift a whole load; return what each scan-out shows, shift by shift."""
+    def _load(self) -> None:
+        """Bring the load into the chains, by the last shift alone where that is possible."""
         for frame in self.program.before_shift:
             self._all(frame)
-        seen: list[list[str]] = []
-        for _ in range(self.program.length):
+        if self.places is not None and self._one_frame_shifts():
+            loads = [
+                load[: chain.length] for chain, load in zip(self.chains, self.loads, strict=True)
+            ]
+            set_before_last_shift(self.machine, self.places, loads)
+            [frame] = self.program.shift
+            self.machine.force(self._at_rest(frame))
+            self._pulse([(replace(frame, pulses=frame.pulses[1:]), self.everywhere)])
+            self.at = self.program.length - 1
+            self._all(frame)
+            if hold_load(self.machine, self.places, loads):
+                return
+            self.places = None
+            self.at = 0
+        self._shift(self.program.length)
+
+    def _unload(self) -> list[list[str]]:
+        """Return what each scan-out shows over all lanes, shift by shift."""
+        for frame in self.program.before_shift:
+            self._all(frame)
+        if self.places is None or not self._one_frame_shifts():
+            return self._shift(self.program.length)
+        seen = self._shift(1)
+        for rows, places in zip(seen, self.places, strict=True):
+            one, zero = unloaded(self.machine, places)
+            rows += [self._word(*rails) for rails in zip(one, zero, strict=True)]
+        return seen
+
+    def _one_frame_shifts(self) -> bool:
+        return len(self.program.shift) == 1
+
+    def _at_rest(self, frame: Frame) -> dict[str, Words | int]:
+        levels = {port: "0" if level == SCAN else level for port, level in frame.levels.items()}
+        return {port: int(level) for port, level in levels.items() if level != FREE}
+
+    def _shift(self, count: int) -> list[list[str]]:
+        """Shift ``count`` times; return what each scan-out shows over all lanes, shift by shift."""
+        seen: list[list[str]] = [[] for _ in self.chains]
+        for _ in range(count):
             for frame in self.program.shift:
                 self.machine.force(self._values(frame))
                 if frame.scan:
-                    seen.append([self._letters(chain.scan_out) for chain in self.chains])
+                    for chain, rows in zip(self.chains, seen, strict=True):
+                        rows.append(self._letters(chain.scan_out))
                 self._pulse([(frame, self.everywhere)])
         return seen
 
@@ -168,10 +213,11 @@ class _Batch:
 
     def _letters(self, port: str) -> str:
         """Return the values of a port over all lanes."""
-        one, zero = (unpack(rail, self.lanes) for rail in self.machine.port(port))
-        return "".join(
-            "H" if high else "L" if low else "X" for high, low in zip(one, zero, strict=True)
-        )
+        return self._word(*self.machine.port(port))
+
+    def _word(self, one: Words, zero: Words) -> str:
+        pairs = zip(unpack(one, self.lanes), unpack(zero, self.lanes), strict=True)
+        return "".join("H" if high else "L" if low else "X" for high, low in pairs)
 
     def _pattern(
         self, lane: int, measured: Sequence[str], ends: Sequence[Sequence[str]]
@@ -187,7 +233,7 @@ class _Batch:
             "".join("01"[int(bit)] for bit in self.inputs[:, lane]),
             tuple(measured),
             tuple(
-                "".join(rows[index][lane] for rows in ends[: chain.length])
-                for index, chain in enumerate(self.chains)
+                "".join(row[lane] for row in rows[: chain.length])
+                for chain, rows in zip(self.chains, ends, strict=True)
             ),
         )

@@ -63,6 +63,18 @@ class Machine:
         self._clock = self._order.clock(self.values)
         self.settle()
 
+    def put_states(self, one: Words, zero: Words) -> None:
+        """Give every state a value or make it unknown, and come to rest without any edge.
+
+        Args:
+            one: Shape (states, words), where it is surely 1.
+            zero: Where it is surely 0.
+        """
+        self._write((one, zero)[: len(self.values)])
+        self._evaluator.run(self.values)
+        self._clock = self._order.clock(self.values)
+        self.settle()
+
     def pulse(self, clocks: Mapping[str, int]) -> None:
         """Bring clock ports to the opposite of their off values together, then back.
 

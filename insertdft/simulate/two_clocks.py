@@ -12,10 +12,14 @@ from collections.abc import Mapping
 from dataclasses import replace
 from typing import Final
 
+import numpy as np
+
 from insertdft.design.flat import Design
 from insertdft.library.cell import Cell, Pin, ScanRole, Storage, StorageKind, Style
 from insertdft.library.expression import Expression, Not, Var, Xor, substitute
 from insertdft.library.functions import choose
+from insertdft.netlist import Ids
+from insertdft.simulate.circuit import Circuit
 from insertdft.simulate.lowering import storages
 from insertdft.simulate.state import Machine
 from insertdft.simulate.words import ONES
@@ -36,19 +40,29 @@ def start_marks(machine: Machine) -> None:
 
     The clock ports must be at rest.
     """
-    states, design = machine.circuit.states, machine.circuit.design
-    rows = [
-        row
-        for row, (instance, number) in enumerate(
-            zip(states.instance.tolist(), states.storage.tolist(), strict=True)
-        )
-        if _is_mark(design.cell_of(instance), number)
-    ]
-    slots = states.slot[rows]
+    slots = machine.circuit.states.slot[mark_rows(machine.circuit)]
     machine.values[0, slots] = 0
     if len(machine.values) == 2:
         machine.values[1, slots] = ONES
     machine.settle()
+
+
+def mark_rows(circuit: Circuit) -> Ids:
+    """Return the rows of ``circuit.states`` that are marks."""
+    states = circuit.states
+    pairs = zip(states.instance.tolist(), states.storage.tolist(), strict=True)
+    found = [
+        row
+        for row, (instance, number) in enumerate(pairs)
+        if _is_mark(circuit.design.cell_of(instance), number)
+    ]
+    return np.array(found, np.int32)
+
+
+def mission_copy(cell: Cell) -> int:
+    """Return the storage of a two-clock cell that must agree with the shifted one, -1 if none."""
+    names = [storage.state for storage in cell.storage]
+    return names.index(_MISSION) if _MISSION in names else -1
 
 
 def _is_mark(cell: Cell | None, number: int) -> bool:
