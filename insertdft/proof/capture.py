@@ -1,8 +1,9 @@
 """Capture mode: each converted cell takes what the original takes, and its clock reaches it.
 
-With ports at their capture values the data, sets and resets of the cells in chains are those of
-the original. Their clocks may differ (test mode may replace a divided clock), but the sequence
-must be able to move each of them, and all must keep their state while the clocks rest.
+With ports at their capture values the data of the cells in chains are those of the original, and
+no set or reset acts that does not act there. Their clocks may differ (test mode may replace a
+divided clock), but the sequence must be able to move each of them, and all must keep their state
+while the clocks rest.
 """
 
 from collections.abc import Mapping
@@ -15,7 +16,7 @@ from insertdft.design.flat import Design
 from insertdft.proof.aig import FALSE, TRUE, Lits
 from insertdft.proof.circuit import evaluate
 from insertdft.proof.joint import AFTER, Joint
-from insertdft.proof.mission import mission_obligations
+from insertdft.proof.mission import capture_blocks
 from insertdft.proof.obligations import Block
 from insertdft.proof.order import Numbers
 from insertdft.proof.part import cone_of
@@ -40,13 +41,9 @@ def capture_obligations(
     clocks = _clocks_arrive(joint, description, rows)
     if all(held.get(port) == value for port, value in mission.items()):
         return clocks, Count(structure=len(rows))
-    found = mission_obligations(joint, held)
     names = {state_name(joint.after.circuit, joint.after.states, at) for at in rows.tolist()}
-    blocks = [_of_chains(block, names) for block in found.blocks if block.kind in _COMPARED]
+    blocks = [_of_chains(block, names) for block in capture_blocks(joint, held)]
     return replace(clocks, blocks=(*blocks, *clocks.blocks)), Count()
-
-
-_COMPARED = ("data", "set", "reset", "latch")
 
 
 def _capture_values(joint: Joint, description: Description) -> dict[str, int]:

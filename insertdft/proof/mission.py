@@ -44,6 +44,34 @@ class _Pair(NamedTuple):
     values: tuple[Lits, Lits]
     forms: tuple[Forms, Forms]
 
+    def kinds(self, rows: tuple[Numbers, Numbers]) -> list[Numbers]:
+        """Return the kind of each matched state, side by side."""
+        return [form.kind[places] for form, places in zip(self.forms, rows, strict=True)]
+
+
+def capture_blocks(joint: Joint, held: Mapping[str, int]) -> list[Block]:
+    """Return that states take the same data with ports at other values than those of mission mode.
+
+    Args:
+        joint: Both netlists.
+        held: Values of ports; a port of that name of the original has it too.
+    """
+    pair, both = _compared(joint, held)
+    edges, levels = np.flatnonzero(both == FLIP_FLOP), np.flatnonzero(both == LATCH)
+    return [*_captures(joint, pair, edges), _latches(joint, pair, levels)]
+
+
+def _compared(joint: Joint, held: Mapping[str, int]) -> tuple[_Pair, Numbers]:
+    """Return values and forms of both sides, and the kind of matched states where it is one."""
+    values = joint.values(BEFORE, held), joint.values(AFTER, held)
+    forms = (
+        forms_of(joint.before.circuit, joint.aig, values[BEFORE]),
+        forms_of(joint.after.circuit, joint.aig, values[AFTER]),
+    )
+    pair = _Pair(values, forms)
+    kinds = pair.kinds(_rows(joint))
+    return pair, np.where(kinds[0] == kinds[1], kinds[0], -1)
+
 
 def mission_obligations(joint: Joint, held: Mapping[str, int]) -> Mission:
     """Return what must hold in mission mode.
@@ -52,15 +80,8 @@ def mission_obligations(joint: Joint, held: Mapping[str, int]) -> Mission:
         joint: Both netlists.
         held: Values of test ports in mission mode; a port of that name of the original has it too.
     """
-    before, after = joint.before, joint.after
-    values = joint.values(BEFORE, held), joint.values(AFTER, held)
-    forms = (
-        forms_of(before.circuit, joint.aig, values[BEFORE]),
-        forms_of(after.circuit, joint.aig, values[AFTER]),
-    )
-    pair = _Pair(values, forms)
-    kinds = [form.kind[rows] for form, rows in zip(forms, _rows(joint), strict=True)]
-    both = np.where(kinds[0] == kinds[1], kinds[0], -1)
+    pair, both = _compared(joint, held)
+    values, kinds = pair.values, pair.kinds(_rows(joint))
     edges = np.flatnonzero(both == FLIP_FLOP)
     levels = np.flatnonzero(both == LATCH)
     mixed = np.flatnonzero((kinds[0] == FLIP_FLOP) & (kinds[1] == LATCH))
@@ -88,35 +109,32 @@ def _subject(joint: Joint, rows: Numbers) -> Callable[[int], str]:
 
 def _flip_flops(joint: Joint, pair: _Pair, rows: Numbers) -> list[Block]:
     aig = joint.aig
-    one, two = (
-        _Columns(form, places[rows]) for form, places in zip(pair.forms, _rows(joint), strict=True)
-    )
-    turned = joint.matching.inverted[rows].astype(np.int32)
+    one, two = _both(joint, pair, rows)
     name = _subject(joint, rows)
-    zero = np.where(turned, two.one, two.zero).astype(np.int32)
-    high = np.where(turned, two.zero, two.one).astype(np.int32)
     known = one.unknown ^ 1
     idle = aig.conj(known, aig.conj(one.zero ^ 1, one.one ^ 1))
+    clash = _says("set and reset of `{}` clash", name)
     return [
         Block("clock", one.clock, two.clock, None, name, _says("the clock of `{}` differs", name)),
-        Block("reset", one.zero, zero, known, name, _says("the reset of `{}` differs", name)),
-        Block("set", one.one, high, known, name, _says("the set of `{}` differs", name)),
-        Block(
-            "reset",
-            one.unknown,
-            two.unknown,
-            known,
-            name,
-            _says("set and reset of `{}` clash", name),
-        ),
-        Block(
-            "data",
-            one.data,
-            two.data ^ turned,
-            idle,
-            name,
-            _says("`{}` takes other data", name),
-        ),
+        Block("reset", one.zero, two.zero, known, name, _says("the reset of `{}` differs", name)),
+        Block("set", one.one, two.one, known, name, _says("the set of `{}` differs", name)),
+        Block("reset", one.unknown, two.unknown, known, name, clash),
+        Block("data", one.data, two.data, idle, name, _says("`{}` takes other data", name)),
+    ]
+
+
+def _captures(joint: Joint, pair: _Pair, rows: Numbers) -> list[Block]:
+    """Compare what flip-flops take where sets and resets may be held off and clocks replaced."""
+    aig = joint.aig
+    one, two = _both(joint, pair, rows)
+    name = _subject(joint, rows)
+    idle = aig.conj(two.unknown ^ 1, aig.conj(two.zero ^ 1, two.one ^ 1))
+    reset, preset = aig.conj(one.zero, two.zero), aig.conj(one.one, two.one)
+    fact = "acts on `{}` where the original's does not"
+    return [
+        Block("reset", reset, two.zero, None, name, _says(f"a reset {fact}", name)),
+        Block("set", preset, two.one, None, name, _says(f"a set {fact}", name)),
+        Block("data", one.data, two.data, idle, name, _says("`{}` takes other data", name)),
     ]
 
 
@@ -129,6 +147,19 @@ class _Columns:
         self.zero = forms.zero[places]
         self.one = forms.one[places]
         self.unknown = forms.unknown[places]
+
+
+def _both(joint: Joint, pair: _Pair, rows: Numbers) -> tuple[_Columns, _Columns]:
+    """Return the forms of matched states, those of the converted netlist as the original's."""
+    one, two = (
+        _Columns(form, places[rows]) for form, places in zip(pair.forms, _rows(joint), strict=True)
+    )
+    turned = joint.matching.inverted[rows].astype(np.int32)
+    zero, high = two.zero, two.one
+    two.zero = np.where(turned, high, zero).astype(np.int32)
+    two.one = np.where(turned, zero, high).astype(np.int32)
+    two.data = two.data ^ turned
+    return one, two
 
 
 def _says(words: str, name: Callable[[int], str]) -> Callable[[int], str]:

@@ -86,6 +86,11 @@ SMALL = {
     "phases, LSSD": _by_hand("phases", "lssd"),
 }
 
+#: Flip-flops of which one has no two-phase cell and stays on the clock that is C for the others.
+RACES = {
+    "edges, LSSD two-phase beside a flip-flop": _by_hand("edges", "lssd", flip_flops="two-phase"),
+}
+
 #: Real cores that need nothing but what the registries have.
 CORES = {
     "serv, mux-D composed": _core("serv", "osu035", "mux-d"),
@@ -96,7 +101,7 @@ CORES = {
     "serv of latches, LSSD composed": _core("serv", "osu035", "lssd", latches="lssd"),
 }
 
-ALL = {**SMALL, **CORES}
+ALL = {**SMALL, **RACES, **CORES}
 
 
 @cache

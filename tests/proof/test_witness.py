@@ -5,14 +5,14 @@ from pathlib import Path
 
 import pytest
 from icarus import run_icarus
+from proof.conversions import Converted, conversion, read
+from proof.planted import mistakes
 from technologies import technology
 
 from insertdft.proof.options import ProofOptions
 from insertdft.proof.prove import prove
 from insertdft.proof.result import Counterexample, Verdict
 from insertdft.proof.witness import REPLAYED, witness_bench
-from proof.conversions import Converted, conversion, read
-from proof.planted import mistakes
 
 #: Conversion -> every how many of its mistakes is replayed.
 SOME = {
